@@ -1,0 +1,11 @@
+import 'server-only';
+
+/** The time of this process. Use cases get it handed in; only jobs and the door read it. */
+export function readClock(): Date {
+  return new Date();
+}
+
+/** The calendar day of an instant in a time zone, as ISO 8601 text. */
+export function dayIn(timeZone: string, at: Date): string {
+  return new Intl.DateTimeFormat('en-CA', { timeZone, year: 'numeric', month: '2-digit', day: '2-digit' }).format(at);
+}

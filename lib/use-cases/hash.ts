@@ -1,0 +1,13 @@
+import 'server-only';
+import { createHash } from 'node:crypto';
+import { canonicalJson } from './canonical-json';
+
+/** SHA-256 of a value's canonical JSON, chained to the hash of what stands before it. */
+export function chainHash(previous: string | null, content: unknown): string {
+  return createHash('sha256').update(previous ?? '').update('\n').update(canonicalJson(content)).digest('hex');
+}
+
+/** SHA-256 (hex) of a link's secret; only this is kept. */
+export function hashSecret(secret: string): string {
+  return createHash('sha256').update(secret).digest('hex');
+}
