@@ -5,6 +5,14 @@ import fs from 'node:fs';
 import path from 'node:path';
 import { SetupError } from './progress.mjs';
 
+/** Programs that run now. @type {Set<import('node:child_process').ChildProcess>} */
+const active = new Set();
+
+/** Ends the programs that `run` and `runVisibly` are waiting for, when this one is asked to stop. */
+export function endCommands() {
+  for (const child of active) child.kill('SIGTERM');
+}
+
 /**
  * Runs a program to its end and returns what it wrote.
  * @param {string} program
@@ -20,6 +28,7 @@ export function run(program, args, options = {}) {
       env: options.env ?? process.env,
       stdio: [options.input === undefined ? 'ignore' : 'pipe', 'pipe', 'pipe'],
     });
+    active.add(child);
     let out = '';
     let all = '';
     const keep = (/** @type {Buffer} */ chunk) => {
@@ -38,6 +47,7 @@ export function run(program, args, options = {}) {
     child.on('error', (error) => reject(new SetupError(`${what}: ${error.message}`, options.todo)));
     // 'exit', not 'close': a daemon that the program leaves behind may hold the pipes open.
     child.on('exit', (code, signal) => {
+      active.delete(child);
       setTimeout(() => {
         if (options.logFile !== undefined) {
           fs.mkdirSync(path.dirname(options.logFile), { recursive: true });
@@ -48,6 +58,25 @@ export function run(program, args, options = {}) {
         const how = signal === null ? `ended with ${code}` : `was ended by ${signal}`;
         return reject(new SetupError(`${what} ${how}\n${tail}`, options.todo));
       }, 10);
+    });
+  });
+}
+
+/**
+ * Runs a program to its end, its output going to the terminal.
+ * @param {string} program
+ * @param {string[]} args
+ * @param {{ cwd: string, env: NodeJS.ProcessEnv }} options
+ * @returns {Promise<number>} its exit code; 1 when it was ended by a signal
+ */
+export function runVisibly(program, args, { cwd, env }) {
+  return new Promise((resolve, reject) => {
+    const child = spawn(program, args, { cwd, env, stdio: ['ignore', 'inherit', 'inherit'] });
+    active.add(child);
+    child.on('error', reject);
+    child.on('exit', (code) => {
+      active.delete(child);
+      resolve(code ?? 1);
     });
   });
 }

@@ -25,7 +25,8 @@ export function isAlive(name) {
   return processBirth(Number(pid)) === birth;
 }
 
-function livingUsers() {
+/** Runs that use the cluster now; forgets those that are over. */
+export function livingUsers() {
   const names = fs.existsSync(folder) ? fs.readdirSync(folder) : [];
   for (const name of names)
     if (!isAlive(name.split('.')[0] ?? '')) fs.rmSync(path.join(folder, name), { force: true });

@@ -43,6 +43,21 @@ export async function choosePort(name, usual, options = {}) {
 }
 
 /**
+ * The port that a person asked for, and no other.
+ * @param {string} text
+ */
+export async function requirePort(text) {
+  const port = Number(text);
+  if (!Number.isInteger(port) || port < 1 || port > 65_535) {
+    throw new SetupError(`PORT is "${text}"; expected: a whole number from 1 to 65535.`);
+  }
+  if (!(await isFree(port))) {
+    throw new SetupError(`Port ${port} is taken.`, 'Set another PORT, or none: then a free one is chosen.');
+  }
+  return port;
+}
+
+/**
  * A port that the system says is free now; for tests, which need not remember it.
  * @returns {Promise<number>}
  */

@@ -109,14 +109,16 @@ export async function cloneTemplate(cluster, template, name) {
 }
 
 /**
- * Drops every database of this run, and the folders where its files were stored.
+ * Drops the databases of this run that a kind of test has made, and the folders where their files were stored.
  * @param {{ port: number, bin: string }} cluster
+ * @param {'w' | 'browser'} kind what follows the prefix in their names
  */
-export async function dropRunDatabases(cluster) {
+export async function dropRunDatabases(cluster, kind) {
+  const mine = `${runPrefix()}_${kind}`;
   const rows = await runSql(
     cluster,
     'postgres',
-    `SELECT datname FROM pg_database WHERE datname LIKE '${runPrefix()}%'`,
+    `SELECT datname FROM pg_database WHERE starts_with(datname, '${mine}')`,
   );
   for (const name of rows.split('\n').filter((line) => line !== '')) {
     await runSql(cluster, 'postgres', `DROP DATABASE IF EXISTS ${name} WITH (FORCE)`);
@@ -124,7 +126,7 @@ export async function dropRunDatabases(cluster) {
   const storage = inMoiety('test-storage');
   for (const name of fs.existsSync(storage) ? fs.readdirSync(storage) : []) {
     const owner = /^moiety_run_(\d+_\d*)/.exec(name)?.[1] ?? '';
-    if (owner === processName() || !isAlive(owner))
+    if (name.startsWith(mine) || !isAlive(owner))
       fs.rmSync(path.join(storage, name), { recursive: true, force: true });
   }
 }

@@ -30,7 +30,7 @@ export default async function prepareTemplate(project: TestProject): Promise<() 
     throw error;
   }
   return async () => {
-    await dropRunDatabases(cluster);
+    await dropRunDatabases(cluster, 'w');
     await cluster.release();
   };
 }
