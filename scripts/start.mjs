@@ -2,7 +2,7 @@
 
 import process from 'node:process';
 import { bringUp } from './setup/bring-up.mjs';
-import { endRunning, findRunning, lastLines, rememberRunning } from './setup/children.mjs';
+import { endRunning, findRunning, lastLines, rememberRunning, waitForStop } from './setup/children.mjs';
 import { mainCluster, stopCluster } from './setup/cluster.mjs';
 import { endCommands } from './setup/commands.mjs';
 import { readAccounts } from './setup/demo-data.mjs';
@@ -17,6 +17,7 @@ const running = {
   birth: processBirth(process.pid) ?? '',
   url: '',
   startedCluster: false,
+  isStopping: false,
   children: [],
 };
 /** @type {import('./setup/children.mjs').Child[]} */
@@ -34,6 +35,10 @@ function remember() {
 /** Ends what was started here, the last first; the database last of all, because the others write to it. */
 async function stopAll() {
   endCommands();
+  if (isRemembered) {
+    running.isStopping = true;
+    remember();
+  }
   for (const child of [...children].reverse()) await step(`Stopping ${child.name}`, () => child.stop());
   if (running.startedCluster) await step('Stopping PostgreSQL', () => stopCluster(mainCluster));
   if (isRemembered) rememberRunning(null);
@@ -84,6 +89,7 @@ function printWelcome(addresses) {
 
 async function main() {
   console.log(`\n${bold('Moiety')}${isDev ? ' (development)' : ''}\n`);
+  if (findRunning()?.running.isStopping === true) await step('Waiting for the last one to stop', waitForStop);
   const found = findRunning();
   if (found?.isAlive) {
     throw new SetupError(

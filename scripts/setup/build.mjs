@@ -66,7 +66,13 @@ export function ensureBuild(options = {}) {
       if (kept.sources === sources && kept.id !== '' && kept.id === buildId(distDir)) return false;
       await run(process.execPath, [path.join(root, 'node_modules/next/dist/bin/next'), 'build'], {
         cwd: root,
-        env: { ...process.env, NODE_ENV: 'production', NEXT_DIST_DIR: distDir, NEXT_TELEMETRY_DISABLED: '1' },
+        env: {
+          ...process.env,
+          NODE_ENV: 'production',
+          NEXT_DIST_DIR: distDir,
+          NEXT_TELEMETRY_DISABLED: '1',
+          NO_COLOR: '1',
+        },
         what: 'next build',
         todo: 'The whole output is in .moiety/logs/build.log',
         logFile: inMoiety('logs/build.log'),

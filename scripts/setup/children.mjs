@@ -120,7 +120,7 @@ const runningFile = inMoiety('running.json');
 
 /**
  * What a running `npm start` has written about itself.
- * @typedef {{ pid: number, birth: string, url: string, startedCluster: boolean, children: { name: string, pid: number, birth: string }[] }} Running
+ * @typedef {{ pid: number, birth: string, url: string, startedCluster: boolean, isStopping: boolean, children: { name: string, pid: number, birth: string }[] }} Running
  */
 
 /** @param {Running | null} running */
@@ -136,6 +136,12 @@ export function rememberRunning(running) {
 export function findRunning() {
   const running = readJson(runningFile, /** @type {Running | null} */ (null));
   return running === null ? null : { running, isAlive: isSame(running.pid, running.birth) };
+}
+
+/** Waits until an `npm start` that was asked to stop has done so. */
+export async function waitForStop() {
+  const until = Date.now() + 4 * PATIENCE;
+  while (findRunning()?.isAlive === true && Date.now() < until) await sleep(100);
 }
 
 /**

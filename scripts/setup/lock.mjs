@@ -20,7 +20,9 @@ export function processBirth(pid) {
   try {
     // The second field, the program's name in parentheses, may hold spaces.
     const stat = fs.readFileSync(`/proc/${pid}/stat`, 'utf8');
-    return stat.slice(stat.lastIndexOf(')') + 2).split(' ')[19] ?? '';
+    const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
+    // A process that has ended keeps its entry until its parent asks; where nobody asks, for good.
+    return fields[0] === 'Z' ? null : (fields[19] ?? '');
   } catch {
     return '';
   }
