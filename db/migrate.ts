@@ -83,7 +83,13 @@ if (process.argv[1] === fileURLToPath(import.meta.url)) {
     const count = await migrateDatabase(ownerUrl);
     process.stdout.write(`${count} migration${count === 1 ? '' : 's'} run\n`);
   } catch (error) {
-    console.error(error);
+    console.error(explain(error));
     process.exit(1);
   }
+}
+
+/** What failed and why, without the stack of the driver; the statement stands in the first message. */
+function explain(error: unknown): string {
+  if (!(error instanceof Error)) return String(error);
+  return error.cause === undefined ? error.message : `${error.message}\n${explain(error.cause)}`;
 }
