@@ -171,7 +171,7 @@ export class ConfigurationError extends Error {
 }
 
 /** Where files are kept. */
-export type StorageConfiguration =
+type StorageConfiguration =
   | { kind: 'folder'; folder: string }
   | {
       kind: 's3';

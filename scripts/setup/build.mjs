@@ -24,7 +24,7 @@ function filesBelow(folder) {
 }
 
 /** A digest of every source file's name and content. */
-export function hashSources() {
+function hashSources() {
   const files = [
     ...fs
       .readdirSync(root)

@@ -39,7 +39,7 @@ function signalGroup(group, signal) {
  * @param {number} pid
  * @param {string} birth
  */
-export async function endGroup(pid, birth) {
+async function endGroup(pid, birth) {
   if (!isSame(pid, birth)) return;
   signalGroup(pid, 'SIGTERM');
   const until = Date.now() + PATIENCE;

@@ -46,7 +46,7 @@ export const runPrefix = () => `moiety_run_${processName()}`;
  * @param {{ port: number, bin: string }} cluster
  * @param {string} current the template that must stay
  */
-export async function dropLeftovers(cluster, current) {
+async function dropLeftovers(cluster, current) {
   const rows = await runSql(
     cluster,
     'postgres',

@@ -7,7 +7,7 @@ import { installFromDebian } from './debian.mjs';
 const BROWSERS = ['chromium', 'chromium-browser', 'google-chrome', 'google-chrome-stable'];
 
 /** The browser for the tests: CHROMIUM_PATH, or the first one found on PATH. */
-export function findChromium() {
+function findChromium() {
   const set = process.env.CHROMIUM_PATH;
   if (set !== undefined && set !== '') return set;
   for (const name of BROWSERS) {
