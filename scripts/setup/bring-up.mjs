@@ -63,7 +63,7 @@ async function prepareDatabase(env, cluster) {
         : await hasNobody(String(env.DATABASE_OWNER_URL));
     if (!empty) return remark('kept as it is');
     fs.rmSync(accountsFile, { force: true });
-    await sow(env);
+    await sow(env, { isOurs: cluster !== undefined });
     return remark('sown');
   });
 }

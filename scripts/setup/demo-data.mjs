@@ -59,11 +59,12 @@ export async function hasNobody(ownerUrl) {
 }
 
 /**
- * Sows the demo scenario.
+ * Sows the demo scenario into an empty database.
  * @param {NodeJS.ProcessEnv} env of the app
+ * @param {{ isOurs: boolean }} database only one on this machine is thrown away when this is cut off
  */
-export async function sow(env) {
-  fs.writeFileSync(unfinished, new Date().toISOString());
+export async function sow(env, { isOurs }) {
+  if (isOurs) fs.writeFileSync(unfinished, new Date().toISOString());
   await runServerProgram(
     'seeds/main.ts',
     { DEMO_ACCOUNTS_FILE: accountsFile, ...env },
