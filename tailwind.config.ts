@@ -4,7 +4,9 @@ import { colourTokens, customProperties, typeScale } from './components/ui/token
 
 const rem = (px: number) => `${px / 16}rem`;
 
-const colours: Record<string, string> = Object.fromEntries(colourTokens.map((token) => [token, `var(--${token})`]));
+const colours: Record<string, string> = Object.fromEntries(
+  colourTokens.map((token) => [token, `var(--${token})`]),
+);
 
 const config: Config = {
   darkMode: 'class',

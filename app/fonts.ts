@@ -26,8 +26,16 @@ const displayExtended = localFont({
 
 const text = localFont({
   src: [
-    { path: '../fonts/atkinson-hyperlegible-next-latin-wght-normal.woff2', weight: '200 800', style: 'normal' },
-    { path: '../fonts/atkinson-hyperlegible-next-latin-wght-italic.woff2', weight: '200 800', style: 'italic' },
+    {
+      path: '../fonts/atkinson-hyperlegible-next-latin-wght-normal.woff2',
+      weight: '200 800',
+      style: 'normal',
+    },
+    {
+      path: '../fonts/atkinson-hyperlegible-next-latin-wght-italic.woff2',
+      weight: '200 800',
+      style: 'italic',
+    },
   ],
   variable: '--font-atkinson',
   display: 'swap',
@@ -35,8 +43,16 @@ const text = localFont({
 
 const textExtended = localFont({
   src: [
-    { path: '../fonts/atkinson-hyperlegible-next-latin-ext-wght-normal.woff2', weight: '200 800', style: 'normal' },
-    { path: '../fonts/atkinson-hyperlegible-next-latin-ext-wght-italic.woff2', weight: '200 800', style: 'italic' },
+    {
+      path: '../fonts/atkinson-hyperlegible-next-latin-ext-wght-normal.woff2',
+      weight: '200 800',
+      style: 'normal',
+    },
+    {
+      path: '../fonts/atkinson-hyperlegible-next-latin-ext-wght-italic.woff2',
+      weight: '200 800',
+      style: 'italic',
+    },
   ],
   variable: '--font-atkinson-ext',
   display: 'swap',

@@ -41,7 +41,9 @@ export function ConfirmDialog({
         <AlertDialog.Overlay className="fixed inset-0 z-40 animate-[fade_120ms_ease-out] bg-veil" />
         <AlertDialog.Content className="fixed inset-x-3 top-1/2 z-50 mx-auto max-h-[88dvh] -translate-y-1/2 overflow-y-auto rounded-xl border border-rule bg-paper p-5 focus:outline-none sm:max-w-md">
           <AlertDialog.Title className="text-xl">{title}</AlertDialog.Title>
-          <AlertDialog.Description className="mt-2 text-base text-ink-2">{description}</AlertDialog.Description>
+          <AlertDialog.Description className="mt-2 text-base text-ink-2">
+            {description}
+          </AlertDialog.Description>
           {children ? <div className="mt-4">{children}</div> : null}
           <div className="mt-5 flex flex-wrap justify-end gap-2">
             <AlertDialog.Cancel asChild>

@@ -22,7 +22,16 @@ export type DialogProps = {
 const widths = { sm: 'sm:max-w-md', md: 'sm:max-w-xl', lg: 'sm:max-w-3xl' };
 
 /** A question or a short form over the page. Esc and the veil close it; focus stays inside and returns after. */
-export function Dialog({ open, onOpenChange, trigger, title, description, footer, size = 'md', children }: DialogProps) {
+export function Dialog({
+  open,
+  onOpenChange,
+  trigger,
+  title,
+  description,
+  footer,
+  size = 'md',
+  children,
+}: DialogProps) {
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       {trigger ? <Radix.Trigger asChild>{trigger}</Radix.Trigger> : null}
@@ -51,7 +60,9 @@ export function Dialog({ open, onOpenChange, trigger, title, description, footer
           </header>
           {children ? <div className="min-h-0 flex-1 overflow-y-auto px-5 pt-1 pb-5">{children}</div> : null}
           {footer ? (
-            <footer className="flex flex-wrap justify-end gap-2 border-t border-rule px-5 py-3">{footer}</footer>
+            <footer className="flex flex-wrap justify-end gap-2 border-t border-rule px-5 py-3">
+              {footer}
+            </footer>
           ) : null}
         </Radix.Content>
       </Radix.Portal>

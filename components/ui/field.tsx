@@ -22,7 +22,16 @@ export type FieldProps = {
  * Label, control, hint and error, tied together. The control inside (any input of this folder) takes its id and
  * description from here: `<Field label="Weight" error={errors.weight?.message}><TextInput {...register('weight')} /></Field>`.
  */
-export function Field({ label, hint, error, optional, required, hideLabel, className, children }: FieldProps) {
+export function Field({
+  label,
+  hint,
+  error,
+  optional,
+  required,
+  hideLabel,
+  className,
+  children,
+}: FieldProps) {
   const id = useId();
   const hintId = `${id}-hint`;
   const errorId = `${id}-error`;

@@ -22,7 +22,17 @@ export type SheetProps = {
 const widths = { md: 'sm:w-[28rem]', lg: 'sm:w-[40rem]' };
 
 /** A panel over the page: from the right on a desktop, from below on a phone. For forms and details that take room. */
-export function Sheet({ open, onOpenChange, trigger, title, description, footer, size = 'md', hideTitle, children }: SheetProps) {
+export function Sheet({
+  open,
+  onOpenChange,
+  trigger,
+  title,
+  description,
+  footer,
+  size = 'md',
+  hideTitle,
+  children,
+}: SheetProps) {
   return (
     <Dialog.Root open={open} onOpenChange={onOpenChange}>
       {trigger ? <Dialog.Trigger asChild>{trigger}</Dialog.Trigger> : null}

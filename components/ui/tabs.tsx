@@ -21,7 +21,10 @@ export function Tabs({
 }) {
   return (
     <Radix.Root value={value} defaultValue={defaultValue ?? tabs[0]?.value} onValueChange={onValueChange}>
-      <Radix.List aria-label={label} className="flex gap-1 overflow-x-auto border-b border-rule [scrollbar-width:none]">
+      <Radix.List
+        aria-label={label}
+        className="flex gap-1 overflow-x-auto border-b border-rule [scrollbar-width:none]"
+      >
         {tabs.map((tab) => (
           <Radix.Trigger
             key={tab.value}
@@ -29,7 +32,9 @@ export function Tabs({
             className="-mb-px min-h-10 shrink-0 border-b-2 border-transparent px-3 text-base font-medium whitespace-nowrap text-ink-2 hover:text-ink focus-visible:outline-offset-[-2px] data-[state=active]:border-ember data-[state=active]:font-semibold data-[state=active]:text-ink pointer-coarse:min-h-11"
           >
             {tab.label}
-            {tab.count === undefined ? null : <span className="ml-1.5 font-mono text-sm text-ink-3">{tab.count}</span>}
+            {tab.count === undefined ? null : (
+              <span className="ml-1.5 font-mono text-sm text-ink-3">{tab.count}</span>
+            )}
           </Radix.Trigger>
         ))}
       </Radix.List>

@@ -56,7 +56,10 @@ export function ThemeSwitch({ onRail = false }: { onRail?: boolean }) {
     <div
       role="group"
       aria-label="Theme"
-      className={classNames('inline-flex rounded-lg border p-0.5', onRail ? 'border-rail-2' : 'border-edge bg-card')}
+      className={classNames(
+        'inline-flex rounded-lg border p-0.5',
+        onRail ? 'border-rail-2' : 'border-edge bg-card',
+      )}
     >
       {choices.map(({ value, label, icon: Icon }) => (
         <button
