@@ -17,7 +17,7 @@ export function endCommands() {
  * Runs a program to its end and returns what it wrote.
  * @param {string} program
  * @param {string[]} args
- * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, input?: string, what?: string, todo?: string, logFile?: string }} [options]
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, input?: string, what?: string, todo?: string, logFile?: string, shownLines?: number }} [options]
  * @returns {Promise<string>} standard output
  * @throws {SetupError} when it cannot be started or ends with an error; the last lines are in the message
  */
@@ -54,7 +54,11 @@ export function run(program, args, options = {}) {
           fs.writeFileSync(options.logFile, all);
         }
         if (code === 0) return resolve(out);
-        const tail = all.trimEnd().split('\n').slice(-40).join('\n');
+        const tail = all
+          .trimEnd()
+          .split('\n')
+          .slice(-(options.shownLines ?? 40))
+          .join('\n');
         const how = signal === null ? `ended with ${code}` : `was ended by ${signal}`;
         return reject(new SetupError(`${what} ${how}\n${tail}`, options.todo));
       }, 10);

@@ -20,6 +20,7 @@ const runModule = (file, args) =>
     cwd: root,
     env: environment(),
     what: path.basename(file),
+    shownLines: 200,
   });
 
 /**
@@ -132,5 +133,6 @@ function runNpm(name) {
     cwd: root,
     env: { ...environment(), PATH: `${path.join(root, 'node_modules/.bin')}:${process.env.PATH ?? ''}` },
     what: `npm run ${name}`,
+    shownLines: 200,
   });
 }
