@@ -15,7 +15,9 @@ export function Providers({ children }: { children: ReactNode }) {
           queries: {
             staleTime: 15_000,
             // A refusal stays a refusal; only an unreachable server or its fault is worth another try.
-            retry: (count, error) => count < 2 && [0, 500, 502, 503].includes((error as unknown as RequestError).problem?.status ?? 0),
+            retry: (count, error) =>
+              count < 2 &&
+              [0, 500, 502, 503].includes((error as unknown as RequestError).problem?.status ?? 0),
           },
         },
       }),
