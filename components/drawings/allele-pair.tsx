@@ -30,22 +30,21 @@ function Half({ copy, left, hatchId }: { copy: AlleleCopy; left: boolean; hatchI
               <path d="M-1 1 1 -1 M0 4 4 0 M3 5 5 3" stroke="var(--ink-3)" strokeWidth="1.2" />
             </pattern>
           </defs>
-          {/* Filled from below up to the probability, as in a measuring glass. */}
-          <rect
-            width="100%"
-            y={`${(1 - copy.probability) * 100}%`}
-            height={`${copy.probability * 100}%`}
-            fill="var(--track)"
-          />
-          <rect
-            width="100%"
-            y={`${(1 - copy.probability) * 100}%`}
-            height={`${copy.probability * 100}%`}
-            fill={`url(#${hatchId})`}
+          <rect width={`${copy.probability * 100}%`} height="100%" fill="var(--track)" />
+          <rect width={`${copy.probability * 100}%`} height="100%" fill={`url(#${hatchId})`} />
+          <line
+            x1={`${copy.probability * 100}%`}
+            x2={`${copy.probability * 100}%`}
+            y2="100%"
+            stroke="var(--ink)"
           />
         </svg>
       ) : null}
-      <span className={classNames('relative', possible && 'rounded-full bg-card px-[3px] py-px')}>
+      <span
+        className="relative"
+        // A halo keeps the letter apart from the hatching behind it.
+        style={possible ? { WebkitTextStroke: '4px var(--card)', paintOrder: 'stroke fill' } : undefined}
+      >
         {copy.letter}
       </span>
     </span>

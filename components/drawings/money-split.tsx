@@ -149,14 +149,17 @@ function Receivers({
   cuts,
   format,
 }: {
-  cuts: { cut: MoneyCut; width: number }[];
+  cuts: { cut: MoneyCut; left: number; width: number }[];
   format: (minorUnits: number) => string;
 }) {
+  const last = cuts.at(-1);
+  const end = last ? last.left + last.width : 100;
   return (
     <>
       <ul
-        className="mt-2 hidden gap-x-[1.4%] @lg:grid"
+        className="mt-2 hidden min-w-max gap-x-3 @lg:grid"
         style={{
+          width: `${end}%`,
           gridTemplateColumns: cuts
             .map(({ width }) => `minmax(max-content, ${Math.max(1, width)}fr)`)
             .join(' '),

@@ -1,5 +1,6 @@
 'use client';
 
+import { Fragment } from 'react';
 import { classNames } from '@/components/ui/class-names';
 import { dayNumber, sayDay, trackSpans } from './season-days';
 import {
@@ -41,11 +42,28 @@ function groupMoments(moments: readonly RibbonMoment[], x: (day: string) => numb
   return groups;
 }
 
+/** Free px to the right of a span in its own track. */
+function roomAfter(
+  spans: readonly { start: number; end: number }[],
+  tracks: readonly number[],
+  index: number,
+  at: (day: number) => number,
+  width: number,
+): number {
+  const end = spans[index]?.end ?? 0;
+  const next = spans.filter(
+    (span, other) => tracks[other] === tracks[index] && span.start >= end && other !== index,
+  );
+  const limit = Math.min(100, ...next.map((span) => at(span.start)));
+  return ((limit - at(end)) / 100) * width;
+}
+
 /** One lane: the head at the left, moments above, phases below, in tracks where they overlap in time. */
 export function SeasonLane({
   lane,
   at,
   width,
+  now,
   active,
   onOpen,
 }: {
@@ -54,6 +72,8 @@ export function SeasonLane({
   at: (day: number) => number;
   /** Width of the axis in px, to know which names fit into their bars. */
   width: number;
+  /** Place of today on the axis, in %. */
+  now: number | null;
   active: boolean;
   onOpen?: () => void;
 }) {
@@ -96,6 +116,10 @@ export function SeasonLane({
         className="relative min-w-(--chart) flex-1 overflow-hidden"
         style={{ minHeight: top + trackCount * TRACK + 20 }}
       >
+        {/* Behind the bars, which are opaque, so that their names stay readable. */}
+        {now === null ? null : (
+          <span className="absolute inset-y-0 w-0.5 -translate-x-1/2 bg-ember" style={{ left: `${now}%` }} />
+        )}
         <div
           className="absolute inset-x-0"
           style={{ top: `calc(50% - ${(top + trackCount * TRACK) / 2}px)` }}
@@ -107,24 +131,39 @@ export function SeasonLane({
             const right = Math.min(100, at(span.end));
             if (right <= 0 || left >= 100) return null;
             const name = phase.label ?? phaseNames[phase.kind];
-            const fits = ((right - left) / 100) * width > name.length * 7.2 + 12;
+            const needed = name.length * 7.2 + 12;
+            const fits = ((right - left) / 100) * width > needed;
+            const room = roomAfter(spans, tracks, index, at, width);
             return (
-              <span
-                key={index}
-                title={`${name} ${phase.certainty}, ${sayDay(phase.from)} – ${sayDay(phase.to)}`}
-                className={classNames(
-                  'absolute flex items-center overflow-hidden rounded-[3px] border px-1.5 text-sm leading-4 font-medium whitespace-nowrap',
-                  phaseLook(phase.kind, phase.certainty, lane.muted),
-                )}
-                style={{
-                  left: `${left}%`,
-                  width: `max(4px, ${right - left}%)`,
-                  top: top + (tracks[index] ?? 0) * TRACK + 2,
-                  height: TRACK - 4,
-                }}
-              >
-                {fits ? name : null}
-              </span>
+              <Fragment key={index}>
+                <span
+                  title={`${name} ${phase.certainty}, ${sayDay(phase.from)} – ${sayDay(phase.to)}`}
+                  className={classNames(
+                    'absolute flex items-center overflow-hidden rounded-[3px] border px-1.5 text-sm leading-4 font-medium whitespace-nowrap',
+                    phaseLook(phase.kind, phase.certainty, lane.muted),
+                  )}
+                  style={{
+                    left: `${left}%`,
+                    width: `max(4px, ${right - left}%)`,
+                    top: top + (tracks[index] ?? 0) * TRACK + 2,
+                    height: TRACK - 4,
+                  }}
+                >
+                  {fits ? name : null}
+                </span>
+                {!fits && room > needed ? (
+                  <span
+                    className="absolute pl-1 text-sm whitespace-nowrap text-ink-2"
+                    style={{
+                      left: `${right}%`,
+                      top: top + (tracks[index] ?? 0) * TRACK + 3,
+                      lineHeight: `${TRACK - 6}px`,
+                    }}
+                  >
+                    {name}
+                  </span>
+                ) : null}
+              </Fragment>
             );
           })}
           {dots.map((group) => {

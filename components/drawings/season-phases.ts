@@ -45,27 +45,27 @@ const looks: Record<Tone, Record<Certainty, string>> = {
   slate: {
     observed: 'bg-slate text-on-slate border-slate',
     expected: 'bg-slate-tint text-slate-deep border-slate',
-    planned: 'text-slate-deep border-slate border-dashed',
+    planned: 'bg-paper text-slate-deep border-slate border-dashed',
   },
   straw: {
     observed: 'bg-straw text-on-straw border-straw',
     expected: 'bg-straw-tint text-straw-deep border-straw',
-    planned: 'text-straw-deep border-straw border-dashed',
+    planned: 'bg-paper text-straw-deep border-straw border-dashed',
   },
   moss: {
     observed: 'bg-moss text-on-moss border-moss',
     expected: 'bg-moss-tint text-moss-deep border-moss',
-    planned: 'text-moss-deep border-moss border-dashed',
+    planned: 'bg-paper text-moss-deep border-moss border-dashed',
   },
   ember: {
     observed: 'bg-ember text-on-ember border-ember',
     expected: 'bg-ember-tint text-ember-deep border-ember',
-    planned: 'text-ember-deep border-ember border-dashed',
+    planned: 'bg-paper text-ember-deep border-ember border-dashed',
   },
   neutral: {
     observed: 'bg-ink-3 text-paper border-ink-3',
     expected: 'bg-rule-2 text-ink-2 border-edge',
-    planned: 'text-ink-2 border-edge border-dashed',
+    planned: 'bg-paper text-ink-2 border-edge border-dashed',
   },
 };
 

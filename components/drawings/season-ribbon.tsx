@@ -91,6 +91,18 @@ export function SeasonRibbon({
                 {month.name}
               </span>
             ))}
+            {showsToday ? (
+              <span
+                aria-hidden
+                className={classNames(
+                  'absolute top-0 z-10 rounded-sm bg-ember px-1 text-tick leading-4 font-semibold whitespace-nowrap text-on-ember',
+                  now > 95 ? '-translate-x-full' : now < 5 ? '' : '-translate-x-1/2',
+                )}
+                style={{ left: `${now}%` }}
+              >
+                today
+              </span>
+            ) : null}
           </div>
         </div>
         <div className="relative">
@@ -110,31 +122,12 @@ export function SeasonRibbon({
                 lane={lane}
                 at={at}
                 width={width}
+                now={showsToday ? now : null}
                 active={lane.id === activeId}
                 onOpen={onOpen ? () => onOpen(lane.id) : undefined}
               />
             ))}
           </ul>
-          {showsToday ? (
-            <div
-              aria-hidden
-              className="pointer-events-none absolute inset-y-0 right-0 left-0 z-[5] sm:left-60"
-            >
-              <span
-                className="absolute -top-1.5 bottom-0 w-0.5 -translate-x-1/2 bg-ember"
-                style={{ left: `${now}%` }}
-              />
-              <span
-                className={classNames(
-                  'absolute -top-4 rounded-sm bg-ember px-1 text-tick leading-4 font-semibold whitespace-nowrap text-on-ember',
-                  now > 90 ? '-translate-x-full' : now < 5 ? '' : '-translate-x-1/2',
-                )}
-                style={{ left: `${now}%` }}
-              >
-                today
-              </span>
-            </div>
-          ) : null}
         </div>
       </div>
       <p className="sr-only">

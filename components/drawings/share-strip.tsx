@@ -94,7 +94,13 @@ export function ShareStrip({
       </div>
       {labels === 'none' ? null : (
         // Spoken by the strip already.
-        <ul aria-hidden className="mt-1 flex flex-wrap justify-between gap-x-4 gap-y-0.5 text-sm">
+        <ul
+          aria-hidden
+          className={classNames(
+            'mt-1 flex flex-wrap gap-x-4 gap-y-0.5 text-sm',
+            held.length <= 3 && 'justify-between',
+          )}
+        >
           {held.map((share, index) => {
             const mark = partnerMark(share.partner);
             return (

@@ -9,7 +9,7 @@ import { WorkspaceMenu } from './workspace-menu';
 /** The rail of a wide screen: places, joint projects with their shares, workspace and person at the foot. */
 export function Rail({ homeHref, items, projects, workspaces, user, onSignOut }: ShellProps) {
   return (
-    <div className="sticky top-0 flex h-dvh flex-col bg-rail text-rail-ink max-md:hidden print:hidden [&_:focus-visible]:outline-rail-ember">
+    <header className="sticky top-0 flex h-dvh flex-col bg-rail text-rail-ink max-md:hidden print:hidden [&_:focus-visible]:outline-rail-ember">
       <Link
         href={homeHref}
         className="flex items-center gap-2 px-5 pt-5 pb-4 font-display text-xl font-bold focus-visible:-outline-offset-4"
@@ -61,7 +61,7 @@ export function Rail({ homeHref, items, projects, workspaces, user, onSignOut }:
         <WorkspaceMenu workspaces={workspaces} />
         <PersonMenu user={user} onSignOut={onSignOut} />
       </div>
-    </div>
+    </header>
   );
 }
 

@@ -29,7 +29,7 @@ export function SplitView({ children, panel, panelTitle, onClose, footer }: Spli
           aria-label="Details"
           className="sticky top-16 flex h-[calc(100dvh-4rem)] min-w-0 flex-col border-l border-rule bg-paper max-lg:hidden"
         >
-          <div className="flex items-start gap-3 px-5 pt-4 pb-2">
+          <div className="flex items-start gap-3 px-5 pt-6 pb-2">
             <h2 className="min-w-0 flex-1 text-xl">{panelTitle}</h2>
             <IconButton label="Close details" onClick={onClose} className="-mt-1.5 -mr-2">
               <X aria-hidden />

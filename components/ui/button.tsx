@@ -8,7 +8,7 @@ export type ButtonSize = 'sm' | 'md' | 'lg';
 
 const tones: Record<ButtonTone, string> = {
   primary: 'bg-ember text-on-ember hover:bg-ember-hover',
-  quiet: 'border border-edge bg-card text-ink hover:bg-hover',
+  quiet: 'border border-rule bg-card text-ink hover:bg-hover hover:border-edge',
   plain: 'text-ink hover:bg-hover',
   moss: 'bg-moss text-on-moss hover:brightness-95',
   danger: 'bg-alarm text-on-alarm hover:bg-alarm-hover',
@@ -89,9 +89,9 @@ export function Button({
           <Spinner />
         </span>
       ) : null}
-      <span className={classNames('contents', busy && '[&>*]:invisible')}>
+      <span className={classNames('contents', busy && '[&>*]:opacity-0')}>
         {icon}
-        <span className={busy ? 'invisible' : 'contents'}>{children}</span>
+        <span className={busy ? 'opacity-0' : 'contents'}>{children}</span>
       </span>
     </button>
   );

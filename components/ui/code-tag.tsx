@@ -23,7 +23,7 @@ export function CodeTag({
         className,
       )}
     >
-      {lead}
+      {lead ? <span className="font-sans">{lead}</span> : null}
       {children}
     </span>
   );

@@ -3,7 +3,7 @@
 import { Command } from 'cmdk';
 import { Check, ChevronsUpDown, X } from 'lucide-react';
 import { Popover } from 'radix-ui';
-import { useState, type ReactNode } from 'react';
+import { useId, useState, type ReactNode } from 'react';
 import { classNames } from './class-names';
 import { useFieldProps } from './field-context';
 import { inputClasses } from './input-classes';
@@ -52,6 +52,7 @@ export function Combobox({
   ...rest
 }: ComboboxProps) {
   const [open, setOpen] = useState(false);
+  const listId = useId();
   const {
     'aria-describedby': describedBy,
     'aria-invalid': invalid,
@@ -75,6 +76,7 @@ export function Combobox({
             role="combobox"
             aria-expanded={open}
             aria-haspopup="listbox"
+            aria-controls={listId}
             aria-label={named ? `${named}${text ? `: ${text}` : ''}` : undefined}
             aria-describedby={describedBy}
             aria-invalid={invalid}
@@ -116,7 +118,7 @@ export function Combobox({
               />
               {loading ? <Spinner className="mr-3 size-4 text-ink-3" /> : null}
             </div>
-            <Command.List className="max-h-72 overflow-y-auto overscroll-contain p-1">
+            <Command.List id={listId} className="max-h-72 overflow-y-auto overscroll-contain p-1">
               {loading ? null : (
                 <Command.Empty className="px-2.5 py-3 text-base text-ink-3">{emptyText}</Command.Empty>
               )}

@@ -61,7 +61,10 @@ export function DataCards<Row extends object>({ view }: { view: DataView<Row> })
           return (
             <li
               key={id}
-              className={classNames('relative flex gap-3 px-4 py-3', activeId === id && 'bg-chosen')}
+              className={classNames(
+                'relative flex gap-3 px-4 py-3 [contain-intrinsic-size:auto_10rem] [content-visibility:auto]',
+                activeId === id && 'bg-chosen',
+              )}
             >
               {onSelectedChange ? (
                 <div className="relative z-10 grid size-11 -my-1 -ml-3 shrink-0 place-items-center">

@@ -1,14 +1,13 @@
 'use client';
 
-import { useVirtualizer } from '@tanstack/react-virtual';
 import { ArrowDown, ArrowUp, ChevronsUpDown } from 'lucide-react';
 import { useRef, useState, type KeyboardEvent, type MouseEvent } from 'react';
 import { Checkbox } from './checkbox';
 import { classNames } from './class-names';
 import type { DataColumn, DataSort } from './data-column';
 import type { DataView } from './data-table';
+import { ROW_HEIGHT, useVirtualRows } from './use-virtual-rows';
 
-const ROW_HEIGHT = 45;
 const INTERACTIVE = 'a, button, input, select, textarea, label, [role="menuitem"]';
 
 function ariaSort(sort: DataSort | null | undefined, id: string): 'ascending' | 'descending' | 'none' {
@@ -28,14 +27,7 @@ export function DataGrid<Row extends object>({ view }: { view: DataView<Row> }) 
     .filter(Boolean)
     .join(' ');
 
-  // The virtualizer hands out new functions by design; this component is drawn anew whenever it says so.
-  const virtualizer = useVirtualizer({
-    count: sortedRows.length,
-    getScrollElement: () => scroller.current,
-    estimateSize: () => ROW_HEIGHT,
-    overscan: 12,
-    enabled: Boolean(virtual),
-  });
+  const virtualizer = useVirtualRows(sortedRows.length, scroller, Boolean(virtual));
 
   const focusRow = (index: number) => {
     const next = Math.max(0, Math.min(sortedRows.length - 1, index));

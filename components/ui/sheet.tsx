@@ -40,6 +40,11 @@ export function Sheet({
         <Dialog.Overlay className="fixed inset-0 z-40 animate-[fade_140ms_ease-out] bg-veil" />
         <Dialog.Content
           {...(description ? {} : { 'aria-describedby': undefined })}
+          // The panel itself takes the focus, not its closing button: a person reads first.
+          onOpenAutoFocus={(event) => {
+            event.preventDefault();
+            if (event.currentTarget instanceof HTMLElement) event.currentTarget.focus();
+          }}
           className={classNames(
             'fixed z-50 flex flex-col border-rule bg-paper focus:outline-none',
             'inset-x-0 bottom-0 max-h-[92dvh] animate-[slide-in-bottom_180ms_ease-out] rounded-t-xl border-t',
