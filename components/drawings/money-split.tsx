@@ -149,21 +149,16 @@ function Receivers({
   cuts,
   format,
 }: {
-  cuts: { cut: MoneyCut; left: number; width: number }[];
+  cuts: { cut: MoneyCut; width: number }[];
   format: (minorUnits: number) => string;
 }) {
-  const last = cuts.at(-1);
-  const end = last ? last.left + last.width : 100;
+  // Columns under their bars only where the narrowest bar has room for its amount.
+  const roomy = cuts.every(({ width }) => width >= 17);
   return (
     <>
       <ul
-        className="mt-2 hidden min-w-max gap-x-3 @lg:grid"
-        style={{
-          width: `${end}%`,
-          gridTemplateColumns: cuts
-            .map(({ width }) => `minmax(max-content, ${Math.max(1, width)}fr)`)
-            .join(' '),
-        }}
+        className={classNames('mt-2 hidden gap-x-[1.4%]', roomy && '@lg:grid')}
+        style={{ gridTemplateColumns: cuts.map(({ width }) => `${width}%`).join(' ') }}
       >
         {cuts.map(({ cut }, index) => (
           <li key={index} className="text-base">
@@ -175,7 +170,7 @@ function Receivers({
           </li>
         ))}
       </ul>
-      <ul className="mt-2 space-y-1.5 @lg:hidden">
+      <ul className={classNames('mt-2 max-w-md space-y-1.5', roomy && '@lg:hidden')}>
         {cuts.map(({ cut }, index) => (
           <li
             key={index}

@@ -81,17 +81,17 @@ function Rack({
   return (
     <section
       aria-label={`Rack ${rack.name}${rack.note ? `, ${rack.note}` : ''}`}
-      className="shrink-0 rounded-t-lg bg-rack p-1.5 pb-2"
+      className="shrink-0 rounded-t-lg border border-b-0 border-rack bg-rack p-1.5 dark:border-rule pb-2"
     >
       <h3 className="max-w-min min-w-full px-1 pt-0.5 pb-1.5 font-sans text-sm font-normal text-rail-ink-2 [font-stretch:100%]">
         <span className="font-bold text-rail-ink">{rack.name}</span> {rack.note}
       </h3>
       <div
         ref={grid}
-        className="grid gap-[3px]"
+        className="grid gap-[3px] [--tub-least:0px] pointer-coarse:[--tub-least:44px]"
         style={{
-          gridTemplateColumns: `repeat(${rack.columns}, minmax(${width}px, 1fr))`,
-          gridAutoRows: height,
+          gridTemplateColumns: `repeat(${rack.columns}, minmax(max(${width}px, var(--tub-least)), 1fr))`,
+          gridAutoRows: `max(${height}px, var(--tub-least))`,
         }}
       >
         {rack.tubs.slice(0, rack.rows * rack.columns).map((tub, index) => {

@@ -20,7 +20,7 @@ export function WorkspaceMenu({ workspaces }: { workspaces: readonly ShellWorksp
         >
           <Warehouse aria-hidden className="size-4.5 shrink-0 text-rail-ink-2" />
           <span className="min-w-0 flex-1">
-            <span className="block truncate text-base leading-5">{current.name}</span>
+            <span className="line-clamp-2 text-sm leading-4 font-semibold">{current.name}</span>
             <span className="block truncate text-sm leading-4 text-rail-ink-2">{current.role}</span>
           </span>
           <ChevronsUpDown aria-hidden className="size-4 shrink-0 text-rail-ink-2" />

@@ -27,12 +27,12 @@ export function DataGrid<Row extends object>({ view }: { view: DataView<Row> }) 
     .filter(Boolean)
     .join(' ');
 
-  const virtualizer = useVirtualRows(sortedRows.length, scroller, Boolean(virtual));
+  const windowed = useVirtualRows(sortedRows.length, scroller, Boolean(virtual));
 
   const focusRow = (index: number) => {
     const next = Math.max(0, Math.min(sortedRows.length - 1, index));
     setFocused(next);
-    if (virtual) virtualizer.scrollToIndex(next);
+    windowed?.scrollTo(next);
     requestAnimationFrame(() =>
       scroller.current?.querySelector<HTMLElement>(`[data-index="${next}"]`)?.focus(),
     );
@@ -56,10 +56,7 @@ export function DataGrid<Row extends object>({ view }: { view: DataView<Row> }) 
     event.preventDefault();
   };
 
-  const indices = virtual
-    ? virtualizer.getVirtualItems().map((item) => item.index)
-    : sortedRows.map((_, index) => index);
-  const firstTop = virtual ? (virtualizer.getVirtualItems()[0]?.start ?? 0) : 0;
+  const indices = windowed?.indices ?? sortedRows.map((_, index) => index);
   const current = Math.min(focused, sortedRows.length - 1);
   // With virtual rows the one that holds the tab stop may be out of sight: then the first in sight takes it.
   const tabStop = indices.includes(current) ? current : indices[0];
@@ -104,9 +101,9 @@ export function DataGrid<Row extends object>({ view }: { view: DataView<Row> }) 
         <div
           role="rowgroup"
           className="relative"
-          style={virtual ? { height: virtualizer.getTotalSize() } : undefined}
+          style={windowed ? { height: windowed.totalHeight } : undefined}
         >
-          <div style={virtual ? { transform: `translateY(${firstTop}px)` } : undefined}>
+          <div style={windowed ? { transform: `translateY(${windowed.top}px)` } : undefined}>
             {indices.map((index) => {
               const row = sortedRows[index];
               if (!row) return null;
