@@ -23,7 +23,7 @@ export function PageHeader({
 }) {
   return (
     <header className="border-b border-rule bg-paper md:sticky md:top-0 md:z-20">
-      <div className="flex min-h-16 flex-wrap items-center gap-x-4 gap-y-2 px-4 py-3 sm:px-6">
+      <div className="flex min-h-16 flex-wrap items-center gap-x-4 gap-y-2 px-4 py-3 sm:px-6 md:py-2">
         <div className="min-w-0 flex-1 basis-64">
           {back ? (
             <Link

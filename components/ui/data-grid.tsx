@@ -33,9 +33,13 @@ export function DataGrid<Row extends object>({ view }: { view: DataView<Row> }) 
     const next = Math.max(0, Math.min(sortedRows.length - 1, index));
     setFocused(next);
     windowed?.scrollTo(next);
-    requestAnimationFrame(() =>
-      scroller.current?.querySelector<HTMLElement>(`[data-index="${next}"]`)?.focus(),
-    );
+    // A row out of sight is drawn only after the scroll: look for it for a few frames.
+    const seek = (frames: number) => {
+      const element = scroller.current?.querySelector<HTMLElement>(`[data-index="${next}"]`);
+      if (element) element.focus({ preventScroll: windowed !== null });
+      else if (frames > 0) requestAnimationFrame(() => seek(frames - 1));
+    };
+    requestAnimationFrame(() => seek(20));
   };
 
   const onKeyDown = (event: KeyboardEvent, index: number, row: Row) => {

@@ -8,6 +8,7 @@ export function Toaster() {
     <Sonner
       position="bottom-center"
       mobileOffset={{ bottom: 76 }}
+      style={{ fontFamily: 'inherit' }}
       toastOptions={{
         unstyled: true,
         classNames: {
