@@ -2,7 +2,7 @@
 
 import { Checkbox } from './checkbox';
 import { classNames } from './class-names';
-import type { DataView } from './data-table';
+import type { DataView } from './data-view';
 import { Select } from './select';
 
 /** A data table on a phone: one card a row, the head line first, the other columns as labelled lines. */

@@ -5,7 +5,7 @@ import { useRef, useState, type KeyboardEvent, type MouseEvent } from 'react';
 import { Checkbox } from './checkbox';
 import { classNames } from './class-names';
 import type { DataColumn, DataSort } from './data-column';
-import type { DataView } from './data-table';
+import type { DataView } from './data-view';
 import { ROW_HEIGHT, useVirtualRows } from './use-virtual-rows';
 
 const INTERACTIVE = 'a, button, input, select, textarea, label, [role="menuitem"]';
