@@ -1,9 +1,10 @@
 import 'server-only';
-import { and, asc, eq, inArray, sql } from 'drizzle-orm';
+import { and, asc, eq, sql } from 'drizzle-orm';
 import type { AnimalId, SpeciesId } from '@/lib/contracts/ids';
 import type { Transaction } from '../scope';
 import { animalLoci, animals, possibleSires } from '../schema/collection';
 import { loci, species } from '../schema/genetics';
+import { visibleAnimal, type Visibility } from './visibility';
 
 /**
  * The whole pedigree of a species in the workspace, for computing only: probabilities and inbreeding need every
@@ -14,7 +15,9 @@ export async function loadPedigree(tx: Transaction, speciesId: SpeciesId) {
     .select({
       id: animals.id,
       code: animals.code,
+      name: animals.name,
       sex: animals.sex,
+      status: animals.status,
       hatchedOn: animals.hatchedOn,
       damId: animals.damId,
       sireId: animals.sireId,
@@ -58,17 +61,16 @@ export async function loadSpeciesForComputing(tx: Transaction, speciesId: Specie
  * computed from them can be kept. Row versions of PostgreSQL (xmin) also move when a seed or another place writes.
  */
 export async function pedigreeFingerprint(tx: Transaction, speciesId: SpeciesId): Promise<string> {
-  const ofSpecies = tx.select({ id: animals.id }).from(animals).where(eq(animals.speciesId, speciesId));
-  const counted = { n: sql<number>`count(*)::int`, moved: sql<string>`coalesce(sum(xmin::text::numeric), 0)::text` };
-  const [a] = await tx
-    .select({ n: sql<number>`count(*)::int`, moved: sql<string>`coalesce(sum(${animals}.xmin::text::numeric), 0)::text` })
-    .from(animals)
-    .where(eq(animals.speciesId, speciesId));
-  const [c] = await tx.select(counted).from(animalLoci).where(inArray(animalLoci.animalId, ofSpecies));
-  const [s] = await tx.select(counted).from(possibleSires).where(inArray(possibleSires.animalId, ofSpecies));
-  const [l] = await tx.select(counted).from(loci).where(eq(loci.speciesId, speciesId));
-  const [sp] = await tx.select(counted).from(species).where(eq(species.id, speciesId));
-  return [a, c, s, l, sp].map((part) => `${part?.n}:${part?.moved}`).join(' ');
+  const [row] = await tx.execute<{ fingerprint: string }>(sql`
+    with a as (select id, xmin::text::numeric as moved from animals where species_id = ${speciesId})
+    select concat_ws(' ',
+      (select concat(count(*), ':', sum(moved)) from a),
+      (select concat(count(*), ':', sum(c.xmin::text::numeric)) from animal_loci c join a on a.id = c.animal_id),
+      (select concat(count(*), ':', sum(p.xmin::text::numeric)) from possible_sires p join a on a.id = p.animal_id),
+      (select concat(count(*), ':', sum(l.xmin::text::numeric)) from loci l where l.species_id = ${speciesId}),
+      (select concat(count(*), ':', sum(m.xmin::text::numeric)) from combinations m where m.species_id = ${speciesId}),
+      (select sp.xmin::text from species sp where sp.id = ${speciesId})) as fingerprint`);
+  return row?.fingerprint ?? '';
 }
 
 /** The parents of an animal and all theirs, by one recursive query: ids only, for rules that need every ancestor. */
@@ -86,4 +88,10 @@ export async function ancestorIds(tx: Transaction, of: readonly AnimalId[]): Pro
     )
     select id from up`);
   return new Set([...rows].map((row) => row.id));
+}
+
+/** The animals of a species that are seen. */
+export async function visibleIdsOfSpecies(tx: Transaction, sees: Visibility, speciesId: SpeciesId): Promise<Set<AnimalId>> {
+  const rows = await tx.select({ id: animals.id }).from(animals).where(and(eq(animals.speciesId, speciesId), visibleAnimal(tx, sees)));
+  return new Set(rows.map((row) => row.id));
 }

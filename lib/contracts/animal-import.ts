@@ -1,9 +1,28 @@
 import { z } from 'zod';
 import { contract } from './contract';
 
-/** What a column of the file can mean. Columns of loci are named "locus: NAME". */
+/** What a column of the file can mean, in the order of the export. */
 export const importFields = [
-  'code', 'name', 'species', 'sex', 'hatched', 'origin', 'status', 'notes', 'sire', 'dam', 'possible sires', 'owners', 'owned from', 'place', 'weight', 'weighed on', 'project', 'loci',
+  'code',
+  'name',
+  'species',
+  'sex',
+  'sexed by',
+  'hatched',
+  'origin',
+  'status',
+  'status since',
+  'held back',
+  'sire',
+  'dam',
+  'possible sires',
+  'loci',
+  'owners',
+  'owned from',
+  'place',
+  'weights',
+  'projects',
+  'notes',
 ] as const;
 export const importField = z.enum(importFields);
 export type ImportField = z.infer<typeof importField>;

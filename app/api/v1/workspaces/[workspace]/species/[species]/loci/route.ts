@@ -1,0 +1,4 @@
+import { handle } from '@/lib/api/handle';
+import { createLocusUseCase } from '@/lib/use-cases/collection/create-locus';
+
+export const POST = handle(createLocusUseCase);
