@@ -1,4 +1,5 @@
 import { checkLocus } from './check-locus';
+import { fractionText, ONE, parseProbability } from './fractions';
 import type { Genotype, LocusDefinition, Phenotype, Source, WelfareNote } from './locus';
 
 /** The usual two-allele locus in short. */
@@ -31,7 +32,7 @@ function define(form: SimpleLocus, dominance: LocusDefinition['dominance'], sing
   if (chromosome !== 'autosomal') phenotypes[a] = form.double ?? form.name;
   const chance = form.penetrance;
   const penetrance = chance
-    ? Object.fromEntries(Object.entries(phenotypes).map(([genotype, shown]) => [genotype, { [shown]: chance, '': complement(chance) }]))
+    ? Object.fromEntries(Object.entries(phenotypes).map(([genotype, shown]) => [genotype, { [shown]: chance, '': complement(chance, form.id) }]))
     : {};
   const welfare: WelfareNote[] = (form.welfare ?? []).map((note) => ({
     text: note.text,
@@ -59,9 +60,8 @@ function define(form: SimpleLocus, dominance: LocusDefinition['dominance'], sing
   return locus;
 }
 
-function complement(text: string): string {
-  const [top = 0, bottom = 1] = text.split('/').map(Number);
-  return `${bottom - top}/${bottom}`;
+function complement(text: string, record: string): string {
+  return fractionText(ONE.sub(parseProbability(text, record)));
 }
 
 /** A locus whose mutant shows in two copies only. */
