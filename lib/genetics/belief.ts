@@ -1,5 +1,4 @@
-import type Fraction from 'fraction.js';
-import Ratio from 'fraction.js';
+import Fraction from 'fraction.js';
 import { ONE, parseProbability, sum, ZERO } from './fractions';
 import { GeneticsError } from './genetics-error';
 import { allelesOf, copiesOf, genotypesOf, isMutant, joinAlleles, normaliseGenotype, phenotypeChances } from './genotype';
@@ -104,7 +103,7 @@ function rarestThatShows(locus: LocusDefinition, sex: Sex, system: SexSystem, ph
   }
   const fewest = Math.min(...showing.map(mutants));
   const kept = showing.filter((genotype) => mutants(genotype) === fewest);
-  return new Map(kept.map((genotype) => [genotype, new Ratio(1, kept.length)]));
+  return new Map(kept.map((genotype) => [genotype, new Fraction(1, kept.length)]));
 }
 
 /**
@@ -150,7 +149,7 @@ export function fromNumbers(belief: NumericBelief): Belief {
   const whole = [...belief].map(([genotype, chance]) => ({ genotype, parts: Math.round(chance * million) }));
   const likeliest = whole.reduce((best, entry) => (entry.parts > best.parts ? entry : best));
   likeliest.parts += million - whole.reduce((total, { parts }) => total + parts, 0);
-  return withoutZeros(new Map(whole.map(({ genotype, parts }) => [genotype, new Ratio(parts, million)])));
+  return withoutZeros(new Map(whole.map(({ genotype, parts }) => [genotype, new Fraction(parts, million)])));
 }
 
 function withoutZeros(belief: Belief): Belief {
