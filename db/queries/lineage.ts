@@ -3,7 +3,7 @@ import { and, asc, eq, sql } from 'drizzle-orm';
 import type { AnimalId, SpeciesId } from '@/lib/contracts/ids';
 import type { Transaction } from '../scope';
 import { animalLoci, animals, possibleSires } from '../schema/collection';
-import { loci, species } from '../schema/genetics';
+import { combinations, loci, species } from '../schema/genetics';
 import { visibleAnimal, type Visibility } from './visibility';
 
 /**
@@ -44,7 +44,7 @@ export async function loadClaims(tx: Transaction, speciesId: SpeciesId) {
     .where(eq(animals.speciesId, speciesId));
 }
 
-/** A species with its loci by name, to compute with. */
+/** A species with its loci and named combinations, to compute with. */
 export async function loadSpeciesForComputing(tx: Transaction, speciesId: SpeciesId) {
   const [row] = await tx.select().from(species).where(eq(species.id, speciesId));
   if (!row) return null;
@@ -53,7 +53,14 @@ export async function loadSpeciesForComputing(tx: Transaction, speciesId: Specie
     .from(loci)
     .where(eq(loci.speciesId, speciesId))
     .orderBy(asc(loci.name));
-  return { species: row, loci: rows };
+  const named = await tx
+    .select({ name: combinations.name, phenotypes: combinations.phenotypes })
+    .from(combinations)
+    .where(eq(combinations.speciesId, speciesId))
+    .orderBy(asc(combinations.name));
+    // The row's id is the one that claims and combinations go by, wherever the definition was written.
+  const defined = rows.map((locus) => ({ ...locus, definition: { ...locus.definition, id: locus.id } }));
+  return { species: row, loci: defined, combinations: named };
 }
 
 /**

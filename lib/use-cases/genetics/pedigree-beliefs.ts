@@ -1,33 +1,98 @@
 import 'server-only';
-import { loadClaims, loadSpeciesForComputing } from '@/db/queries/lineage';
+import { loadClaims, loadPedigree, loadSpeciesForComputing, pedigreeFingerprint } from '@/db/queries/lineage';
 import type { Transaction } from '@/db/scope';
-import type { SpeciesId } from '@/lib/contracts/ids';
+import type { LocusClaim } from '@/lib/contracts/animal';
+import type { AnimalId, LocusId, SpeciesId } from '@/lib/contracts/ids';
+import { describeAnimal } from '@/lib/genetics/describe';
 import { notFound } from '../refusal';
-import type { SpeciesBeliefs } from './species-beliefs';
+import { isShown, wordsOf } from './copies';
+import { inferGenotype, mixOdds, type Odds } from './pass-down';
+import type { LocusBelief, SpeciesBeliefs } from './species-beliefs';
+
+/** Results by species, each with the state of the data that it was computed from. Few, as each holds a whole pedigree. */
+const kept = new Map<SpeciesId, { fingerprint: string; beliefs: SpeciesBeliefs }>();
+const MOST_KEPT = 24;
 
 /**
  * What every animal of a species probably carries. The full pedigree of the workspace is used, whoever asks: what a
- * viewer is shown of it is narrowed by the caller.
+ * viewer is shown of it is narrowed by the caller. Computed once per state of the data.
  */
 export async function loadBeliefs(tx: Transaction, speciesId: SpeciesId): Promise<SpeciesBeliefs> {
+  const fingerprint = await pedigreeFingerprint(tx, speciesId);
+  const before = kept.get(speciesId);
+  if (before?.fingerprint === fingerprint) return before.beliefs;
   const found = await loadSpeciesForComputing(tx, speciesId);
   if (!found) throw notFound('species');
-  const claims = new Map((await loadClaims(tx, speciesId)).map((row) => [`${row.animalId} ${row.locusId}`, row.claim]));
+  const beliefs = inferBeliefs(found, await loadPedigree(tx, speciesId), await loadClaims(tx, speciesId));
+  kept.delete(speciesId);
+  kept.set(speciesId, { fingerprint, beliefs });
+  for (const oldest of kept.keys()) {
+    if (kept.size <= MOST_KEPT) break;
+    kept.delete(oldest);
+  }
+  return beliefs;
+}
+
+type Loaded = NonNullable<Awaited<ReturnType<typeof loadSpeciesForComputing>>>;
+type Pedigree = Awaited<ReturnType<typeof loadPedigree>>;
+type Claims = Awaited<ReturnType<typeof loadClaims>>;
+
+function inferBeliefs({ species, loci, combinations }: Loaded, { rows, possibleSires }: Pedigree, claimRows: Claims): SpeciesBeliefs {
+  const claims = new Map<string, LocusClaim>(claimRows.map((row) => [`${row.animalId} ${row.locusId}`, row.claim]));
+  const byId = new Map(rows.map((row) => [row.id, row]));
+  const sires = new Map<AnimalId, { sireId: AnimalId; weight: number }[]>();
+  for (const { animalId, ...sire } of possibleSires) sires.set(animalId, [...(sires.get(animalId) ?? []), sire]);
+  const definitions = new Map(loci.map((locus) => [locus.id, locus.definition]));
+  const known = new Map<string, Odds>();
+
+  const odds = (animalId: AnimalId, locusId: LocusId): Odds => {
+    const key = `${animalId} ${locusId}`;
+    const there = known.get(key);
+    if (there) return there;
+    const row = byId.get(animalId);
+    const definition = definitions.get(locusId);
+    if (!row || !definition) throw new RangeError(`No animal ${animalId} or locus ${locusId} in this species.`);
+    const several = sires.get(animalId) ?? [];
+    const inferred = inferGenotype(definition, species.sexSystem, {
+      sex: row.sex,
+      claim: claims.get(key) ?? null,
+      sire: row.sireId
+        ? odds(row.sireId, locusId)
+        : mixOdds(several.map(({ sireId, weight }) => ({ odds: odds(sireId, locusId), weight }))),
+      dam: row.damId ? odds(row.damId, locusId) : null,
+    });
+    known.set(key, inferred);
+    return inferred;
+  };
+
+  const belief = (animalId: AnimalId, locusId: LocusId): LocusBelief => {
+    const claim = claims.get(`${animalId} ${locusId}`) ?? null;
+    const row = byId.get(animalId);
+    const hasParents = Boolean(row?.sireId ?? row?.damId) || sires.has(animalId);
+    return {
+      locusId,
+      genotypes: [...odds(animalId, locusId)].map(([genotype, probability]) => ({ genotype, probability })).sort((a, b) => b.probability - a.probability),
+      shows: claim?.shows ?? null,
+      source: claim ? 'recorded' : hasParents ? 'relatives' : 'nothing',
+    };
+  };
+
+  const described = new Map<AnimalId, string>();
   return {
-    speciesId,
-    sexSystem: found.species.sexSystem,
-    loci: found.loci,
+    speciesId: species.id,
+    sexSystem: species.sexSystem,
+    loci,
+    belief,
     describe: (animalId) => {
-      const words = found.loci.map(({ id }) => claims.get(`${animalId} ${id}`)?.shows).filter(Boolean);
-      return words.join(' ') || 'Normal';
+      const said = described.get(animalId) ??
+        describeAnimal(
+          loci.map(({ id, definition }) => ({ locus: definition, shown: claims.get(`${animalId} ${id}`)?.shows ?? null, belief: odds(animalId, id) })),
+          combinations,
+        );
+      described.set(animalId, said);
+      return said;
     },
-    belief: (animalId, locusId) => {
-      const claim = claims.get(`${animalId} ${locusId}`);
-      const genotypes = Object.entries(claim?.carries?.genotypes ?? {}).map(([genotype, text]) => {
-        const [top = 0, bottom = 1] = text.split('/').map(Number);
-        return { genotype, probability: top / bottom };
-      });
-      return { locusId, genotypes, shows: claim?.shows ?? null, source: claim ? 'recorded' : 'nothing' };
-    },
+    shows: (one) => isShown({ loci }, one),
+    words: (one) => wordsOf({ loci }, one),
   };
 }

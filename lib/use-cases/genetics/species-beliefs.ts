@@ -18,13 +18,24 @@ export interface LocusBelief {
   source: 'recorded' | 'relatives' | 'nothing';
 }
 
+/** A locus of the species with its id in the workspace. */
+export interface BeliefLocus {
+  id: LocusId;
+  name: string;
+  definition: LocusDefinition;
+}
+
 /** What every animal of a species probably carries, computed over the whole pedigree of the workspace. */
 export interface SpeciesBeliefs {
   speciesId: SpeciesId;
   sexSystem: SexSystem;
-  loci: readonly { id: LocusId; name: string; definition: LocusDefinition }[];
+  loci: readonly BeliefLocus[];
   /** In the trade's words: what it looks like, then what it carries or may carry, such as "Clown, 66% het Albino". */
   describe(animalId: AnimalId): string;
   /** @throws {RangeError} for an animal or locus of another species */
   belief(animalId: AnimalId, locusId: LocusId): LocusBelief;
+  /** Whether the animal surely shows something other than normal here. */
+  shows(belief: LocusBelief): boolean;
+  /** "66% het", "visual", "no copy". */
+  words(belief: LocusBelief): string;
 }
