@@ -1,4 +1,4 @@
-import Fraction from 'fraction.js';
+import type Fraction from 'fraction.js';
 import { SEXES, type Cross, type KnownSex } from './cross';
 import { HALF, ONE, sum, ZERO } from './fractions';
 import { GeneticsError } from './genetics-error';

@@ -1,4 +1,4 @@
-import Fraction from 'fraction.js';
+import type Fraction from 'fraction.js';
 import { certainly, wildGenotype, type Belief } from './belief';
 import { HALF, ONE, sum, ZERO } from './fractions';
 import { GeneticsError } from './genetics-error';

@@ -1,4 +1,4 @@
-import Fraction from 'fraction.js';
+import type Fraction from 'fraction.js';
 import { livingSexes, type Cross, type KnownSex } from './cross';
 import { ONE, ZERO } from './fractions';
 import { phenotypeChances } from './genotype';

@@ -1,4 +1,4 @@
-import Fraction from 'fraction.js';
+import type Fraction from 'fraction.js';
 import { HALF, ONE, ZERO } from './fractions';
 import { GeneticsError } from './genetics-error';
 import { allelesOf, copiesOf, isLethal, isSexLinked, joinAlleles, normaliseGenotype } from './genotype';

@@ -40,7 +40,7 @@ function nameOf(pedigree: OrderedPedigree, a: string, b: string): string {
   const removed = Math.abs(x - y);
   if (fewer === 1 && removed === 0) return full ? 'half sibling' : 'full sibling';
   if (fewer === 1) {
-    const great = 'great-'.repeat(Math.max(0, removed - 2)) + (removed > 1 ? 'grand' : '');
+    const great = 'great-'.repeat(removed - 1);
     return `${full}${great}${x < y ? 'aunt or uncle' : 'niece or nephew'}`;
   }
   const double = full === '' && alike.length >= 4 ? 'double ' : '';
