@@ -17,9 +17,13 @@ async function main(files: readonly string[]): Promise<number> {
       const outcome = runCase(kinds, given);
       if (outcome.ok) right += 1;
       else wrong += 1;
-      console.log(`${outcome.ok ? 'ok   ' : 'WRONG'} ${outcome.id}${outcome.message ? ` (${outcome.message})` : ''}`);
+      console.log(
+        `${outcome.ok ? 'ok   ' : 'WRONG'} ${outcome.id}${outcome.message ? ` (${outcome.message})` : ''}`,
+      );
       for (const { what, expected, actual, difference, ok } of outcome.findings) {
-        console.log(`  ${ok ? '   ' : '!! '}${what}: expected ${expected}, actual ${actual}${difference ? `, difference ${difference}` : ''}`);
+        console.log(
+          `  ${ok ? '   ' : '!! '}${what}: expected ${expected}, actual ${actual}${difference ? `, difference ${difference}` : ''}`,
+        );
       }
     }
   }

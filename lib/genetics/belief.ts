@@ -1,8 +1,24 @@
 import Fraction from 'fraction.js';
 import { ONE, parseProbability, sum, ZERO } from './fractions';
 import { GeneticsError } from './genetics-error';
-import { allelesOf, copiesOf, genotypesOf, isMutant, joinAlleles, normaliseGenotype, phenotypeChances } from './genotype';
-import { NORMAL, type Genotype, type LocusDefinition, type Phenotype, type ProbabilityText, type Sex, type SexSystem } from './locus';
+import {
+  allelesOf,
+  copiesOf,
+  genotypesOf,
+  isMutant,
+  joinAlleles,
+  normaliseGenotype,
+  phenotypeChances,
+} from './genotype';
+import {
+  NORMAL,
+  type Genotype,
+  type LocusDefinition,
+  type Phenotype,
+  type ProbabilityText,
+  type Sex,
+  type SexSystem,
+} from './locus';
 
 /** What is thought of one animal at one locus: chance per genotype, adding up to exactly 1; impossible ones left out. */
 export type Belief = ReadonlyMap<Genotype, Fraction>;
@@ -27,7 +43,10 @@ export function certainly(genotype: Genotype): Belief {
 /** The genotype without any mutant allele. */
 export function wildGenotype(locus: LocusDefinition, sex: Sex, system: SexSystem): Genotype {
   const wild = locus.alleles[0]?.symbol ?? '+';
-  return joinAlleles(locus, new Array<string>(copiesOf(locus, sex === 'unknown' ? 'female' : sex, system)).fill(wild));
+  return joinAlleles(
+    locus,
+    new Array<string>(copiesOf(locus, sex === 'unknown' ? 'female' : sex, system)).fill(wild),
+  );
 }
 
 /**
@@ -47,7 +66,11 @@ export function readBelief(
   }
   const total = sum(belief.values());
   if (!total.equals(ONE)) {
-    throw new GeneticsError('probability', locus.id, `The chances at ${locus.name} add up to ${total.toFraction()}, not 1.`);
+    throw new GeneticsError(
+      'probability',
+      locus.id,
+      `The chances at ${locus.name} add up to ${total.toFraction()}, not 1.`,
+    );
   }
   return withoutZeros(belief);
 }
@@ -69,7 +92,8 @@ export function beliefFromStatements(
   let belief: Belief | null = null;
   for (const statement of statements) {
     if (statement.kind === 'genotypes') belief = readBelief(locus, sex, system, statement.genotypes);
-    if (statement.kind === 'het') belief = hetBelief(locus, sex, system, statement.allele, statement.probability);
+    if (statement.kind === 'het')
+      belief = hetBelief(locus, sex, system, statement.allele, statement.probability);
   }
   const shows = statements.flatMap((statement) => (statement.kind === 'shows' ? [statement.phenotype] : []));
   if (!belief) {
@@ -80,7 +104,13 @@ export function beliefFromStatements(
   return belief;
 }
 
-function hetBelief(locus: LocusDefinition, sex: Sex, system: SexSystem, allele: string, probability: string): Belief {
+function hetBelief(
+  locus: LocusDefinition,
+  sex: Sex,
+  system: SexSystem,
+  allele: string,
+  probability: string,
+): Belief {
   const wild = wildGenotype(locus, sex, system);
   const carrier = joinAlleles(locus, [...allelesOf(wild).slice(1), allele]);
   const chance = parseProbability(probability, locus.id);
@@ -96,10 +126,15 @@ function rarestThatShows(locus: LocusDefinition, sex: Sex, system: SexSystem, ph
   const wild = locus.alleles[0]?.symbol;
   const mutants = (genotype: Genotype) => allelesOf(genotype).filter((symbol) => symbol !== wild).length;
   const showing = genotypesOf(locus, sex, system).filter(
-    (genotype) => !locus.lethal.includes(genotype) && (phenotypeChances(locus, genotype).get(phenotype) ?? ZERO).gt(0),
+    (genotype) =>
+      !locus.lethal.includes(genotype) && (phenotypeChances(locus, genotype).get(phenotype) ?? ZERO).gt(0),
   );
   if (showing.length === 0) {
-    throw new GeneticsError('evidence', locus.id, `No genotype of ${locus.name} shows "${phenotype || 'normal'}".`);
+    throw new GeneticsError(
+      'evidence',
+      locus.id,
+      `No genotype of ${locus.name} shows "${phenotype || 'normal'}".`,
+    );
   }
   const fewest = Math.min(...showing.map(mutants));
   const kept = showing.filter((genotype) => mutants(genotype) === fewest);
@@ -130,7 +165,9 @@ export function conditionOnPhenotype(locus: LocusDefinition, belief: Belief, phe
 export function chanceOfCarrying(locus: LocusDefinition, belief: Belief, allele?: string): Fraction {
   return sum(
     [...belief]
-      .filter(([genotype]) => (allele === undefined ? isMutant(locus, genotype) : allelesOf(genotype).includes(allele)))
+      .filter(([genotype]) =>
+        allele === undefined ? isMutant(locus, genotype) : allelesOf(genotype).includes(allele),
+      )
       .map(([, chance]) => chance),
   );
 }

@@ -20,7 +20,8 @@ export function checkLocus(locus: LocusDefinition, system?: SexSystem): void {
   if (odd !== undefined) fail('alleles', `"${odd}" cannot be a symbol: it is empty or holds a space or "/".`);
   if (system && locus.chromosome !== 'autosomal') {
     const has = { XY: 'X', ZW: 'Z', TSD: null, unknown: null }[system];
-    if (has !== locus.chromosome) fail('chromosome', `the species (${system}) has no ${locus.chromosome} chromosome.`);
+    if (has !== locus.chromosome)
+      fail('chromosome', `the species (${system}) has no ${locus.chromosome} chromosome.`);
   }
   const possible = new Set([
     ...genotypesWithCopies(locus, 2),
@@ -29,16 +30,19 @@ export function checkLocus(locus: LocusDefinition, system?: SexSystem): void {
   const known = (genotype: string, where: string) => {
     const joined = joinAlleles(locus, allelesOf(genotype));
     if (joined !== genotype) fail('genotype', `write "${joined}" instead of "${genotype}" under ${where}.`);
-    if (!possible.has(genotype)) fail('genotype', `"${genotype}" under ${where} is no genotype of this locus.`);
+    if (!possible.has(genotype))
+      fail('genotype', `"${genotype}" under ${where} is no genotype of this locus.`);
   };
   for (const [genotype, shown] of Object.entries(locus.phenotypes)) {
     known(genotype, 'phenotypes');
-    if (/^\s*normal\s*$/i.test(shown)) fail('phenotype', `leave "${genotype}" out: what is not named is normal.`);
+    if (/^\s*normal\s*$/i.test(shown))
+      fail('phenotype', `leave "${genotype}" out: what is not named is normal.`);
   }
   for (const [genotype, chances] of Object.entries(locus.penetrance)) {
     known(genotype, 'penetrance');
     const total = sum(Object.values(chances).map((chance) => parseProbability(chance, locus.id)));
-    if (!total.equals(ONE)) fail('penetrance', `the chances of "${genotype}" add up to ${total.toFraction()}, not 1.`);
+    if (!total.equals(ONE))
+      fail('penetrance', `the chances of "${genotype}" add up to ${total.toFraction()}, not 1.`);
   }
   for (const genotype of locus.lethal) known(genotype, 'lethal');
   const livingCopies = (copies: 1 | 2) =>

@@ -25,7 +25,11 @@ export function eggChances(cross: Cross, wanted: WantedYoung): { chance: Fractio
     }
   }
   if (wanted.sex && (cross.sexSystem === 'TSD' || cross.sexSystem === 'unknown')) {
-    throw new GeneticsError('evidence', wanted.sex, 'The sex of the young does not follow from the parents in this species.');
+    throw new GeneticsError(
+      'evidence',
+      wanted.sex,
+      'The sex of the young does not follow from the parents in this species.',
+    );
   }
   // Chance per sex and weight of each distinct product over the blocks seen so far.
   let states = new Map<string, { male: Fraction; female: Fraction; weight: Fraction }>([

@@ -3,7 +3,13 @@ import { certainly, wildGenotype, type Belief } from './belief';
 import { HALF, ONE, sum, ZERO } from './fractions';
 import { GeneticsError } from './genetics-error';
 import { allelesOf, copiesOf, isLethal, isSexLinked, joinAlleles, normaliseGenotype } from './genotype';
-import { gametesOfHaplotypes, linkageBlocks, type Haplotype, type LinkageBlock, type LinkedLoci } from './linkage';
+import {
+  gametesOfHaplotypes,
+  linkageBlocks,
+  type Haplotype,
+  type LinkageBlock,
+  type LinkedLoci,
+} from './linkage';
 import type { Genotype, LocusDefinition, SexSystem } from './locus';
 
 export type KnownSex = 'male' | 'female';
@@ -84,15 +90,30 @@ function crossBlock(block: LinkageBlock, { sexSystem, sire, dam }: CrossInput): 
     })),
   );
   const average = (sex: KnownSex) =>
-    mergeEggs(states.flatMap(({ weight, eggs }) => eggs[sex].map((egg) => ({ ...egg, chance: egg.chance.mul(weight) }))));
-  return { loci: block.loci, parentStates: states, eggs: { male: average('male'), female: average('female') } };
+    mergeEggs(
+      states.flatMap(({ weight, eggs }) =>
+        eggs[sex].map((egg) => ({ ...egg, chance: egg.chance.mul(weight) })),
+      ),
+    );
+  return {
+    loci: block.loci,
+    parentStates: states,
+    eggs: { male: average('male'), female: average('female') },
+  };
 }
 
-function parentStates(block: LinkageBlock, parent: ParentGenetics, sex: KnownSex, system: SexSystem): ParentState[] {
+function parentStates(
+  block: LinkageBlock,
+  parent: ParentGenetics,
+  sex: KnownSex,
+  system: SexSystem,
+): ParentState[] {
   const ids = block.loci.map(({ id }) => id);
   const phase = parent.phases?.find(({ loci }) => ids.some((id) => loci.includes(id)));
   if (phase) {
-    const haplotypes = phase.haplotypes.map((haplotype) => ids.map((id) => haplotype[phase.loci.indexOf(id)] ?? ''));
+    const haplotypes = phase.haplotypes.map((haplotype) =>
+      ids.map((id) => haplotype[phase.loci.indexOf(id)] ?? ''),
+    );
     block.loci.forEach((locus, i) => {
       normaliseGenotype(locus, haplotypes.map((haplotype) => haplotype[i] ?? '').join('/'), sex, system);
     });
@@ -103,7 +124,11 @@ function parentStates(block: LinkageBlock, parent: ParentGenetics, sex: KnownSex
     const belief = parent.beliefs.get(locus.id) ?? certainly(wildGenotype(locus, sex, system));
     const total = sum(belief.values());
     if (!total.equals(ONE)) {
-      throw new GeneticsError('probability', locus.id, `The chances at ${locus.name} add up to ${total.toFraction()}, not 1.`);
+      throw new GeneticsError(
+        'probability',
+        locus.id,
+        `The chances at ${locus.name} add up to ${total.toFraction()}, not 1.`,
+      );
     }
     states = states.flatMap((state) =>
       [...belief].flatMap(([written, chance]) => {
@@ -141,7 +166,8 @@ function eggsOf(
   const [first] = block.loci;
   // Sons of XY get no X of their sire, daughters of ZW no Z of their dam.
   const fromOneParent = first !== undefined && copiesOf(first, sex, system) === 1;
-  const fromSire = fromOneParent && system === 'XY' ? nothing : gametesOfHaplotypes(sire, block.recombination);
+  const fromSire =
+    fromOneParent && system === 'XY' ? nothing : gametesOfHaplotypes(sire, block.recombination);
   const fromDam = fromOneParent && system === 'ZW' ? nothing : gametesOfHaplotypes(dam, block.recombination);
   const eggs = fromSire.flatMap((paternal) =>
     fromDam.map((maternal): EggClass => {
@@ -170,7 +196,8 @@ function mergeEggs(eggs: readonly EggClass[]): EggClass[] {
 /** Share of eggs of one sex that live. */
 function livingShare(cross: Cross, sex: KnownSex): Fraction {
   return cross.blocks.reduce(
-    (product, { eggs }) => product.mul(sum(eggs[sex].filter(({ lethal }) => !lethal).map(({ chance }) => chance))),
+    (product, { eggs }) =>
+      product.mul(sum(eggs[sex].filter(({ lethal }) => !lethal).map(({ chance }) => chance))),
     ONE,
   );
 }

@@ -22,7 +22,12 @@ export interface SimpleLocus {
   source: Source;
 }
 
-function define(form: SimpleLocus, dominance: LocusDefinition['dominance'], single: Phenotype, double: Phenotype): LocusDefinition {
+function define(
+  form: SimpleLocus,
+  dominance: LocusDefinition['dominance'],
+  single: Phenotype,
+  double: Phenotype,
+): LocusDefinition {
   const chromosome = form.chromosome ?? 'autosomal';
   const a = form.allele;
   const [het, hom] = [`+/${a}`, `${a}/${a}`];
@@ -32,7 +37,12 @@ function define(form: SimpleLocus, dominance: LocusDefinition['dominance'], sing
   if (chromosome !== 'autosomal') phenotypes[a] = form.double ?? form.name;
   const chance = form.penetrance;
   const penetrance = chance
-    ? Object.fromEntries(Object.entries(phenotypes).map(([genotype, shown]) => [genotype, { [shown]: chance, '': complement(chance, form.id) }]))
+    ? Object.fromEntries(
+        Object.entries(phenotypes).map(([genotype, shown]) => [
+          genotype,
+          { [shown]: chance, '': complement(chance, form.id) },
+        ]),
+      )
     : {};
   const welfare: WelfareNote[] = (form.welfare ?? []).map((note) => ({
     text: note.text,

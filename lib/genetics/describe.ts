@@ -22,7 +22,9 @@ const CERTAIN = 1 - 1e-9;
  * @param belief its genotypes given that it shows this
  */
 export function carriedAlleles(locus: LocusDefinition, shown: Phenotype, belief: NumericBelief): Carried[] {
-  const copies: readonly (1 | 2)[] = [...new Set([...belief.keys()].map((genotype) => (allelesOf(genotype).length === 1 ? 1 : 2)))];
+  const copies: readonly (1 | 2)[] = [
+    ...new Set([...belief.keys()].map((genotype) => (allelesOf(genotype).length === 1 ? 1 : 2))),
+  ];
   const showing = copies
     .flatMap((count) => genotypesWithCopies(locus, count))
     .filter((genotype) => (phenotypeChances(locus, genotype).get(shown)?.valueOf() ?? 0) > 0);
@@ -31,14 +33,27 @@ export function carriedAlleles(locus: LocusDefinition, shown: Phenotype, belief:
     const chance = (wanted: (genotype: Genotype) => boolean) =>
       [...belief].reduce((total, [genotype, p]) => total + (wanted(genotype) ? p : 0), 0);
     const told = showing.length > 0 && showing.every((genotype) => count(genotype) > 0);
-    const toldTwice = showing.length > 0 && showing.every((genotype) => count(genotype) === allelesOf(genotype).length);
+    const toldTwice =
+      showing.length > 0 && showing.every((genotype) => count(genotype) === allelesOf(genotype).length);
     const found: Carried[] = [];
     const add = (form: Carried['form'], probability: number) => {
       if (probability > 0) found.push({ locusId: locus.id, allele: symbol, name, form, probability });
     };
-    if (!told) add('het', chance((genotype) => allelesOf(genotype).length === 2 && count(genotype) === 1));
-    if (!toldTwice) add('homozygous', chance((genotype) => count(genotype) === 2));
-    if (!told) add('carries', chance((genotype) => allelesOf(genotype).length === 1 && count(genotype) === 1));
+    if (!told)
+      add(
+        'het',
+        chance((genotype) => allelesOf(genotype).length === 2 && count(genotype) === 1),
+      );
+    if (!toldTwice)
+      add(
+        'homozygous',
+        chance((genotype) => count(genotype) === 2),
+      );
+    if (!told)
+      add(
+        'carries',
+        chance((genotype) => allelesOf(genotype).length === 1 && count(genotype) === 1),
+      );
     return found;
   });
 }
@@ -65,7 +80,9 @@ export function looksWords(
 ): string {
   const left = new Map(loci.flatMap(({ id }) => (phenotypes[id] ? [[id, phenotypes[id]] as const] : [])));
   const words: string[] = [];
-  const bySize = combinations.toSorted((a, b) => Object.keys(b.phenotypes).length - Object.keys(a.phenotypes).length);
+  const bySize = combinations.toSorted(
+    (a, b) => Object.keys(b.phenotypes).length - Object.keys(a.phenotypes).length,
+  );
   for (const { name, phenotypes: needed } of bySize) {
     const parts = Object.entries(needed);
     if (parts.length === 0 || parts.some(([id, shown]) => left.get(id) !== shown)) continue;
@@ -99,8 +116,11 @@ export function describeAnimal(
   threshold = 0,
 ): string {
   const phenotypes: Record<string, Phenotype> = {};
-  for (const { locus, shown, belief } of loci) phenotypes[locus.id] = shown ?? impliedPhenotype(locus, belief);
-  const carried = loci.flatMap(({ locus, belief }) => carriedAlleles(locus, phenotypes[locus.id] ?? NORMAL, belief));
+  for (const { locus, shown, belief } of loci)
+    phenotypes[locus.id] = shown ?? impliedPhenotype(locus, belief);
+  const carried = loci.flatMap(({ locus, belief }) =>
+    carriedAlleles(locus, phenotypes[locus.id] ?? NORMAL, belief),
+  );
   return joinDescription(
     looksWords(
       loci.map(({ locus }) => locus),

@@ -1,7 +1,14 @@
 import Fraction from 'fraction.js';
 import { ONE, parseProbability } from './fractions';
 import { GeneticsError } from './genetics-error';
-import { NORMAL, type Genotype, type LocusDefinition, type Phenotype, type Sex, type SexSystem } from './locus';
+import {
+  NORMAL,
+  type Genotype,
+  type LocusDefinition,
+  type Phenotype,
+  type Sex,
+  type SexSystem,
+} from './locus';
 
 /**
  * How many copies of a locus an animal of a known sex has: 2, or 1 for X in an XY male and Z in a ZW female.
@@ -66,7 +73,12 @@ export function genotypesOf(locus: LocusDefinition, sex: Sex, system: SexSystem)
  * Puts a genotype in the declared order and checks that the animal can have it.
  * @throws {GeneticsError} 'unknown-allele' or 'genotype' (for example a pair at Z in a ZW female)
  */
-export function normaliseGenotype(locus: LocusDefinition, genotype: Genotype, sex: Sex, system: SexSystem): Genotype {
+export function normaliseGenotype(
+  locus: LocusDefinition,
+  genotype: Genotype,
+  sex: Sex,
+  system: SexSystem,
+): Genotype {
   const joined = joinAlleles(locus, allelesOf(genotype));
   if (!genotypesOf(locus, sex, system).includes(joined)) {
     const fits = genotypesOf(locus, sex, system).slice(0, 3).join(', ');
@@ -88,7 +100,9 @@ export function isLethal(locus: LocusDefinition, genotype: Genotype): boolean {
 export function phenotypeChances(locus: LocusDefinition, genotype: Genotype): Map<Phenotype, Fraction> {
   const penetrance = locus.penetrance[genotype];
   if (penetrance) {
-    return new Map(Object.entries(penetrance).map(([shown, chance]) => [shown, parseProbability(chance, locus.id)]));
+    return new Map(
+      Object.entries(penetrance).map(([shown, chance]) => [shown, parseProbability(chance, locus.id)]),
+    );
   }
   return new Map([[locus.phenotypes[genotype] ?? NORMAL, ONE]]);
 }

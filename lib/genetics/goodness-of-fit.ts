@@ -33,8 +33,10 @@ export function testFit(
   mostOutcomes = MOST_OUTCOMES,
 ): GoodnessOfFit {
   for (const [name, count] of Object.entries(observed)) {
-    if (!Number.isSafeInteger(count) || count < 0) throw new GeneticsError('evidence', name, `"${count}" is no count.`);
-    if (!expected[name]) throw new GeneticsError('evidence', name, `"${name}" was observed but has no expected chance.`);
+    if (!Number.isSafeInteger(count) || count < 0)
+      throw new GeneticsError('evidence', name, `"${count}" is no count.`);
+    if (!expected[name])
+      throw new GeneticsError('evidence', name, `"${name}" was observed but has no expected chance.`);
   }
   const names = Object.keys(expected);
   const chances = Object.values(expected);
@@ -45,7 +47,9 @@ export function testFit(
   const total = counts.reduce((a, b) => a + b, 0);
   if (total === 0) throw new GeneticsError('evidence', 'observed', 'Nothing has been observed.');
   const impossible = counts.some((count, i) => count > 0 && chances[i]?.equals(ZERO));
-  const kept = chances.map((chance, i) => ({ chance, count: counts[i] ?? 0 })).filter(({ chance }) => chance.gt(0));
+  const kept = chances
+    .map((chance, i) => ({ chance, count: counts[i] ?? 0 }))
+    .filter(({ chance }) => chance.gt(0));
   const degreesOfFreedom = kept.length - 1;
   const chiSquared = impossible
     ? null
@@ -75,10 +79,13 @@ function exactMultinomial(
   if (outcomes > mostOutcomes) return null;
   // Over a common denominator every likelihood is an integer over the same number, so comparison is exact.
   const denominator = classes.reduce((common, { chance }) => common.lcm(new Fraction(chance.d)), ONE);
-  const weights = classes.map(({ chance }) => (chance.mul(denominator).valueOf() ? chance.mul(denominator).n : 0n));
+  const weights = classes.map(({ chance }) =>
+    chance.mul(denominator).valueOf() ? chance.mul(denominator).n : 0n,
+  );
   const factorials: bigint[] = [1n];
   for (let i = 1; i <= total; i += 1) factorials.push((factorials[i - 1] ?? 1n) * BigInt(i));
-  const choose = (n: number, k: number) => (factorials[n] ?? 1n) / ((factorials[k] ?? 1n) * (factorials[n - k] ?? 1n));
+  const choose = (n: number, k: number) =>
+    (factorials[n] ?? 1n) / ((factorials[k] ?? 1n) * (factorials[n - k] ?? 1n));
   let left = total;
   let seen = 1n;
   classes.forEach(({ count }, i) => {

@@ -30,13 +30,20 @@ export function recombinationFromDistance(centimorgans: number): Fraction {
  * @param linked measured recombination, which takes precedence over positions on the map
  * @throws {GeneticsError} 'linkage'
  */
-export function linkageBlocks(loci: readonly LocusDefinition[], linked: readonly LinkedLoci[] = []): LinkageBlock[] {
+export function linkageBlocks(
+  loci: readonly LocusDefinition[],
+  linked: readonly LinkedLoci[] = [],
+): LinkageBlock[] {
   const byId = new Map(loci.map((locus) => [locus.id, locus]));
   const placed = new Set<string>();
   const blocks: LinkageBlock[] = [];
   for (const { loci: ids, recombination } of linked) {
     if (recombination.length !== ids.length - 1) {
-      throw new GeneticsError('linkage', ids.join(', '), 'Give one recombination fraction less than linked loci.');
+      throw new GeneticsError(
+        'linkage',
+        ids.join(', '),
+        'Give one recombination fraction less than linked loci.',
+      );
     }
     const members = ids.map((id) => {
       const locus = byId.get(id);
@@ -61,7 +68,9 @@ export function linkageBlocks(loci: readonly LocusDefinition[], linked: readonly
     const ordered = members.toSorted((a, b) => (a.linkage?.position ?? 0) - (b.linkage?.position ?? 0));
     const recombination = ordered
       .slice(1)
-      .map((locus, i) => recombinationFromDistance((locus.linkage?.position ?? 0) - (ordered[i]?.linkage?.position ?? 0)));
+      .map((locus, i) =>
+        recombinationFromDistance((locus.linkage?.position ?? 0) - (ordered[i]?.linkage?.position ?? 0)),
+      );
     blocks.push(checked({ loci: ordered, recombination }));
   }
   return blocks;
@@ -105,7 +114,10 @@ export function gametesOfHaplotypes(
     );
     paths = merge(paths, (path) => `${path.strand} ${path.haplotype.join(' ')}`);
   });
-  return merge(paths, (path) => path.haplotype.join(' ')).map(({ haplotype, chance }) => ({ haplotype, chance }));
+  return merge(paths, (path) => path.haplotype.join(' ')).map(({ haplotype, chance }) => ({
+    haplotype,
+    chance,
+  }));
 }
 
 function merge<T extends { chance: Fraction }>(entries: readonly T[], keyOf: (entry: T) => string): T[] {

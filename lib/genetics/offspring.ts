@@ -34,7 +34,10 @@ export function phenotypeClasses(
   loci.forEach((locus, i) => {
     const shown = [...phenotypeChances(locus, genotypes[i] ?? '')];
     classes = classes.flatMap(({ values, chance }) =>
-      shown.map(([phenotype, p]) => ({ values: { ...values, [locus.id]: phenotype }, chance: chance.mul(p) })),
+      shown.map(([phenotype, p]) => ({
+        values: { ...values, [locus.id]: phenotype },
+        chance: chance.mul(p),
+      })),
     );
   });
   return classes;
@@ -42,7 +45,10 @@ export function phenotypeClasses(
 
 function multiplyOut(
   cross: Cross,
-  classesOf: (loci: readonly LocusDefinition[], genotypes: readonly Genotype[]) => { values: Record<string, string>; chance: Fraction }[],
+  classesOf: (
+    loci: readonly LocusDefinition[],
+    genotypes: readonly Genotype[],
+  ) => { values: Record<string, string>; chance: Fraction }[],
 ): OffspringClass<string>[] {
   return livingSexes(cross).flatMap(({ sex, computeAs, factor }) => {
     let rows = [{ values: {} as Record<string, string>, chance: factor }];

@@ -72,19 +72,30 @@ export function outcomeTable(cross: Cross, options: OutcomeOptions): OutcomeTabl
     for (const block of cross.blocks) {
       const classes = blockClasses(block, computeAs);
       partial = partial
-        .flatMap((row) => classes.map((entry) => ({ chance: row.chance.mul(entry.chance), classes: [...row.classes, entry] })))
+        .flatMap((row) =>
+          classes.map((entry) => ({
+            chance: row.chance.mul(entry.chance),
+            classes: [...row.classes, entry],
+          })),
+        )
         .toSorted((a, b) => b.chance.compare(a.chance))
         .slice(0, limit);
     }
     return partial.map(({ chance, classes }): OutcomeRow => {
-      const phenotypes = Object.assign({}, ...classes.map(({ values }) => values)) as Record<string, Phenotype>;
+      const phenotypes = Object.assign({}, ...classes.map(({ values }) => values)) as Record<
+        string,
+        Phenotype
+      >;
       const genotypes = new Map(classes.flatMap((entry) => [...entry.genotypes]));
       const carried = cross.loci.flatMap((locus) =>
         carriedAlleles(locus, phenotypes[locus.id] ?? NORMAL, genotypes.get(locus.id) ?? new Map()),
       );
       const shown = Object.entries(phenotypes).filter(([, phenotype]) => phenotype !== NORMAL);
       return {
-        key: [sex, ...shown.map(([id, phenotype]) => `${id}=${phenotype}`).toSorted()].filter(Boolean).join(' ') || 'normal',
+        key:
+          [sex, ...shown.map(([id, phenotype]) => `${id}=${phenotype}`).toSorted()]
+            .filter(Boolean)
+            .join(' ') || 'normal',
         sex,
         phenotypes,
         looksLike: looksWords(cross.loci, phenotypes, combinations),
@@ -94,7 +105,9 @@ export function outcomeTable(cross: Cross, options: OutcomeOptions): OutcomeTabl
         probability: chance.valueOf(),
         atLeastOne: chanceOfAny(eggMixture(cross, classes, share), clutch, hatchRate),
         welfare: cross.loci.flatMap(({ id, welfare }) =>
-          welfare.filter((note) => note.genotypes.some((genotype) => (genotypes.get(id)?.get(genotype) ?? 0) > 0)),
+          welfare.filter((note) =>
+            note.genotypes.some((genotype) => (genotypes.get(id)?.get(genotype) ?? 0) > 0),
+          ),
         ),
       };
     });
@@ -111,7 +124,13 @@ function blockClasses(block: CrossBlock, sex: KnownSex): BlockClass[] {
     if (egg.lethal) continue;
     for (const { values, chance } of phenotypeClasses(block.loci, egg.genotypes)) {
       const key = JSON.stringify(values);
-      const entry = classes.get(key) ?? { values, chance: ZERO, genotypes: new Map(), weights: new Map(), perState: [] };
+      const entry = classes.get(key) ?? {
+        values,
+        chance: ZERO,
+        genotypes: new Map(),
+        weights: new Map(),
+        perState: [],
+      };
       const weight = chance.mul(egg.chance);
       entry.chance = entry.chance.add(weight);
       block.loci.forEach(({ id }, i) => {
@@ -126,7 +145,10 @@ function blockClasses(block: CrossBlock, sex: KnownSex): BlockClass[] {
   for (const entry of classes.values()) {
     for (const [id, weights] of entry.weights) {
       // Divided while exact, so that certainty is exactly 1.
-      entry.genotypes.set(id, new Map([...weights].map(([g, weight]) => [g, weight.div(entry.chance).valueOf()])));
+      entry.genotypes.set(
+        id,
+        new Map([...weights].map(([g, weight]) => [g, weight.div(entry.chance).valueOf()])),
+      );
     }
     const wanted = JSON.stringify(entry.values);
     entry.perState = block.parentStates.map(({ eggs }) => {
@@ -144,7 +166,11 @@ function blockClasses(block: CrossBlock, sex: KnownSex): BlockClass[] {
 }
 
 /** Chances per egg of a row, merged where they are equal, with the weights of the parents' states. */
-function eggMixture(cross: Cross, classes: readonly BlockClass[], share: number): { chance: number; weight: number }[] {
+function eggMixture(
+  cross: Cross,
+  classes: readonly BlockClass[],
+  share: number,
+): { chance: number; weight: number }[] {
   let mixture = new Map<number, number>([[share, 1]]);
   cross.blocks.forEach((block, index) => {
     const next = new Map<number, number>();

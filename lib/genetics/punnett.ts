@@ -105,6 +105,10 @@ function gametes(
     }
     return found
       .filter(({ chance }) => chance.gt(ZERO))
-      .map(({ alleles, chance }) => ({ alleles: loci.map(({ id }) => alleles.get(id) ?? null), sex: youngSex, chance }));
+      .map(({ alleles, chance }) => ({
+        alleles: loci.map(({ id }) => alleles.get(id) ?? null),
+        sex: youngSex,
+        chance,
+      }));
   });
 }

@@ -75,7 +75,10 @@ export function inbreedingOfClutch(pedigree: OrderedPedigree, sire: string, dam:
  * keeping (J. D. Ballou and R. C. Lacy, in: Population Management for Survival and Recovery, 1995).
  * @returns by id, lowest first
  */
-export function meanKinships(pedigree: OrderedPedigree, living: readonly string[]): { id: string; meanKinship: number }[] {
+export function meanKinships(
+  pedigree: OrderedPedigree,
+  living: readonly string[],
+): { id: string; meanKinship: number }[] {
   const kinship = kinshipTable(pedigree);
   const places = living.map((id) => placeIn(pedigree, id));
   return living

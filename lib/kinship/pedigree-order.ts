@@ -35,7 +35,8 @@ export interface OrderedPedigree {
 export function orderPedigree(animals: readonly PedigreeAnimal[]): OrderedPedigree {
   const byId = new Map<string, PedigreeAnimal>();
   for (const animal of animals) {
-    if (byId.has(animal.id)) throw new PedigreeError('duplicate', [animal.id], `"${animal.id}" is listed twice.`);
+    if (byId.has(animal.id))
+      throw new PedigreeError('duplicate', [animal.id], `"${animal.id}" is listed twice.`);
     byId.set(animal.id, animal);
   }
   const ids: string[] = [];
@@ -48,7 +49,11 @@ export function orderPedigree(animals: readonly PedigreeAnimal[]): OrderedPedigr
       if (placeOf.has(id)) return;
       if (onPath.has(id)) {
         const circle = [...path.slice(path.findIndex((step) => step.id === id)).map((step) => step.id), id];
-        throw new PedigreeError('own-ancestor', circle, `"${id}" would be its own ancestor: ${circle.join(' ← ')}.`);
+        throw new PedigreeError(
+          'own-ancestor',
+          circle,
+          `"${id}" would be its own ancestor: ${circle.join(' ← ')}.`,
+        );
       }
       onPath.add(id);
       const animal = byId.get(id);

@@ -35,7 +35,12 @@ function nameOf(pedigree: OrderedPedigree, a: string, b: string): string {
   const closest = shared.filter(({ x, y }) => x + y === nearest);
   const [{ x, y } = { x: 0, y: 0 }] = closest;
   const alike = closest.filter((line) => line.x === x && line.y === y);
-  const full = areMates(pedigree, alike.map(({ id }) => id)) ? '' : 'half ';
+  const full = areMates(
+    pedigree,
+    alike.map(({ id }) => id),
+  )
+    ? ''
+    : 'half ';
   const fewer = Math.min(x, y);
   const removed = Math.abs(x - y);
   if (fewer === 1 && removed === 0) return full ? 'half sibling' : 'full sibling';
@@ -51,7 +56,9 @@ function nameOf(pedigree: OrderedPedigree, a: string, b: string): string {
 /** Whether two of the nearest common ancestors bred together, so that the line is a full one. */
 function areMates(pedigree: OrderedPedigree, ids: readonly string[]): boolean {
   const places = new Set(ids.map((id) => placeIn(pedigree, id)));
-  return pedigree.ids.some((_, place) => places.has(pedigree.sire[place] ?? -1) && places.has(pedigree.dam[place] ?? -1));
+  return pedigree.ids.some(
+    (_, place) => places.has(pedigree.sire[place] ?? -1) && places.has(pedigree.dam[place] ?? -1),
+  );
 }
 
 function inLine(word: 'parent' | 'offspring', generations: number): string {

@@ -7,7 +7,8 @@ const TOLERANCE = 1e-9;
 /** Reads "2/3", "0.25" or 0.25 exactly. */
 export function readFraction(value: Json | undefined, what: string): Fraction {
   if (typeof value === 'number') return new Fraction(String(value));
-  if (typeof value === 'string' && /^-?\d+(\.\d+)?(\/\d+)?$/.test(value.trim())) return new Fraction(value.trim());
+  if (typeof value === 'string' && /^-?\d+(\.\d+)?(\/\d+)?$/.test(value.trim()))
+    return new Fraction(value.trim());
   throw new Error(`${what}: "${JSON.stringify(value)}" is no number.`);
 }
 
@@ -26,7 +27,11 @@ export function compareExactly(what: string, expected: Json | undefined, actual:
 }
 
 /** Compares to 1e-9. */
-export function compareClosely(what: string, expected: Json | undefined, actual: number | undefined): Finding {
+export function compareClosely(
+  what: string,
+  expected: Json | undefined,
+  actual: number | undefined,
+): Finding {
   const wanted = readFraction(expected, what).valueOf();
   const difference = wanted - (actual ?? Number.NaN);
   return {
@@ -41,5 +46,11 @@ export function compareClosely(what: string, expected: Json | undefined, actual:
 /** Compares texts, counts or truths. */
 export function compareSame(what: string, expected: Json | undefined, actual: Json): Finding {
   const texts = [JSON.stringify(expected), JSON.stringify(actual)];
-  return { what, expected: String(texts[0]), actual: String(texts[1]), difference: '', ok: texts[0] === texts[1] };
+  return {
+    what,
+    expected: String(texts[0]),
+    actual: String(texts[1]),
+    difference: '',
+    ok: texts[0] === texts[1],
+  };
 }

@@ -3,19 +3,30 @@ import type { Evidence, PedigreeMember } from '@/lib/genetics/pedigree/pedigree-
 import { inbreedingCoefficients } from '@/lib/kinship/inbreeding';
 import { kinshipOf } from '@/lib/kinship/kinship';
 import { orderPedigree, placeIn } from '@/lib/kinship/pedigree-order';
-import { asList, asObject, asText, type CaseKind, type Finding, type Json, type JsonObject } from './case-kind';
+import {
+  asList,
+  asObject,
+  asText,
+  type CaseKind,
+  type Finding,
+  type Json,
+  type JsonObject,
+} from './case-kind';
 import { compareClosely, compareSame, readFraction } from './compare';
 import { phenotypeFromCase, readLoci, readSexSystem } from './read-genetics';
 
 const numbers = (value: Json | undefined, what: string): Record<string, number> =>
-  Object.fromEntries(Object.entries(asObject(value, what)).map(([key, p]) => [key, readFraction(p, what).valueOf()]));
+  Object.fromEntries(
+    Object.entries(asObject(value, what)).map(([key, p]) => [key, readFraction(p, what).valueOf()]),
+  );
 
 const optionalText = (value: Json | undefined, what: string): string | null =>
   value === undefined || value === null ? null : asText(value, what);
 
 function readMember(given: JsonObject): PedigreeMember {
   const sex = given.sex ?? 'unknown';
-  if (sex !== 'male' && sex !== 'female' && sex !== 'unknown') throw new Error(`sex: ${JSON.stringify(sex)} is not known.`);
+  if (sex !== 'male' && sex !== 'female' && sex !== 'unknown')
+    throw new Error(`sex: ${JSON.stringify(sex)} is not known.`);
   const group = optionalText(given.sire_group, 'sire_group');
   return {
     id: asText(given.id, 'id of an animal'),
@@ -36,7 +47,12 @@ function readEvidence(given: JsonObject): Evidence[] {
     evidence.push({ animal, locus, kind: 'prior', genotypes: numbers(chances, 'prior') });
   }
   for (const [locus, shown] of Object.entries(asObject(given.phenotype ?? {}, 'phenotype'))) {
-    evidence.push({ animal, locus, kind: 'phenotype', phenotype: phenotypeFromCase(asText(shown, 'phenotype')) });
+    evidence.push({
+      animal,
+      locus,
+      kind: 'phenotype',
+      phenotype: phenotypeFromCase(asText(shown, 'phenotype')),
+    });
   }
   for (const [locus, value] of Object.entries(asObject(given.test ?? {}, 'test'))) {
     const test = asObject(value, 'test');
@@ -49,10 +65,9 @@ function readEvidence(given: JsonObject): Evidence[] {
 const pedigree: CaseKind = (input, expected) => {
   const animals = asList(input.animals, 'animals').map((entry) => asObject(entry, 'an animal'));
   const frequencies = Object.fromEntries(
-    Object.entries(asObject(input.founder_frequencies ?? {}, 'founder_frequencies')).map(([locus, chances]) => [
-      locus,
-      numbers(chances, 'founder_frequencies'),
-    ]),
+    Object.entries(asObject(input.founder_frequencies ?? {}, 'founder_frequencies')).map(
+      ([locus, chances]) => [locus, numbers(chances, 'founder_frequencies')],
+    ),
   );
   const result = inferPedigree({
     sexSystem: readSexSystem(input.sex_system),
@@ -65,7 +80,9 @@ const pedigree: CaseKind = (input, expected) => {
   const within = (what: string, given: Json, actual: ReadonlyMap<string, number> | undefined) => {
     const chances = asObject(given, what);
     for (const name of new Set([...Object.keys(chances), ...(actual?.keys() ?? [])])) {
-      findings.push(compareClosely(`${what} ${name}`, chances[name] ?? 0, actual ? (actual.get(name) ?? 0) : undefined));
+      findings.push(
+        compareClosely(`${what} ${name}`, chances[name] ?? 0, actual ? (actual.get(name) ?? 0) : undefined),
+      );
     }
   };
   for (const [locus, byAnimal] of Object.entries(asObject(expected.posterior ?? {}, 'posterior'))) {
@@ -82,7 +99,11 @@ const pedigree: CaseKind = (input, expected) => {
 const kinship: CaseKind = (input, expected) => {
   const animals = asList(input.animals, 'animals').map((entry) => {
     const given = asObject(entry, 'an animal');
-    return { id: asText(given.id, 'id'), sire: optionalText(given.sire, 'sire'), dam: optionalText(given.dam, 'dam') };
+    return {
+      id: asText(given.id, 'id'),
+      sire: optionalText(given.sire, 'sire'),
+      dam: optionalText(given.dam, 'dam'),
+    };
   });
   const ordered = orderPedigree(animals);
   const inbreeding = inbreedingCoefficients(ordered);

@@ -26,21 +26,30 @@ export function readLoci(input: JsonObject): LocusDefinition[] {
     const given = asObject(entry, 'a locus');
     const id = asText(given.id, 'id of a locus');
     const chromosome = given.chromosome ?? 'autosomal';
-    if (chromosome !== 'autosomal' && chromosome !== 'X' && chromosome !== 'Z') throw new Error(`${id}: chromosome?`);
+    if (chromosome !== 'autosomal' && chromosome !== 'X' && chromosome !== 'Z')
+      throw new Error(`${id}: chromosome?`);
     const phenotypes = Object.entries(asObject(given.phenotypes ?? {}, 'phenotypes'))
       .map(([genotype, shown]) => [genotype, phenotypeFromCase(asText(shown, 'phenotype'))] as const)
       .filter(([, shown]) => shown !== NORMAL);
-    const penetrance = Object.entries(asObject(given.penetrance ?? {}, 'penetrance')).map(([genotype, chances]) => {
-      const entries = Object.entries(asObject(chances, 'penetrance'));
-      return [genotype, Object.fromEntries(entries.map(([shown, p]) => [phenotypeFromCase(shown), asText(p, 'chance')]))];
-    });
+    const penetrance = Object.entries(asObject(given.penetrance ?? {}, 'penetrance')).map(
+      ([genotype, chances]) => {
+        const entries = Object.entries(asObject(chances, 'penetrance'));
+        return [
+          genotype,
+          Object.fromEntries(entries.map(([shown, p]) => [phenotypeFromCase(shown), asText(p, 'chance')])),
+        ];
+      },
+    );
     const locus: LocusDefinition = {
       id,
       name: id,
       symbol: id,
       chromosome,
       linkage: null,
-      alleles: asList(given.alleles, 'alleles').map((symbol) => ({ symbol: asText(symbol, 'allele'), name: asText(symbol, 'allele') })),
+      alleles: asList(given.alleles, 'alleles').map((symbol) => ({
+        symbol: asText(symbol, 'allele'),
+        name: asText(symbol, 'allele'),
+      })),
       phenotypes: Object.fromEntries(phenotypes),
       penetrance: Object.fromEntries(penetrance),
       lethal: asList(given.lethal ?? [], 'lethal').map((genotype) => asText(genotype, 'lethal genotype')),
@@ -61,7 +70,9 @@ export function readCross(input: JsonObject): CrossInput {
     const linkage = asObject(input.linkage, 'linkage');
     linked.push({
       loci: asList(linkage.loci, 'linkage.loci').map((id) => asText(id, 'locus')),
-      recombination: asList(linkage.recombination, 'recombination').map((r) => readFraction(r, 'recombination')),
+      recombination: asList(linkage.recombination, 'recombination').map((r) =>
+        readFraction(r, 'recombination'),
+      ),
     });
   }
   const parent = (side: 'sire' | 'dam'): ParentGenetics => {
@@ -76,7 +87,9 @@ export function readCross(input: JsonObject): CrossInput {
     }
     const haplotypes = input[`${side}_haplotypes`];
     if (haplotypes === undefined) return { beliefs };
-    const chromosomes = asList(haplotypes, 'haplotypes').map((each) => asList(each, 'haplotype').map((a) => asText(a, 'allele')));
+    const chromosomes = asList(haplotypes, 'haplotypes').map((each) =>
+      asList(each, 'haplotype').map((a) => asText(a, 'allele')),
+    );
     return { beliefs, phases: [{ loci: linked[0]?.loci ?? [], haplotypes: chromosomes }] };
   };
   return { sexSystem, loci, linked, sire: parent('sire'), dam: parent('dam') };

@@ -30,7 +30,14 @@ export function sireGroupOf(animal: PedigreeMember): string {
  */
 export function buildGraph(input: PedigreeInput): PedigreeGraph {
   const members = checkMembers(input.animals);
-  const graph: PedigreeGraph = { impossible: false, sizes: [], factors: [], genotypes: [], sireGroups: [], sexes: [] };
+  const graph: PedigreeGraph = {
+    impossible: false,
+    sizes: [],
+    factors: [],
+    genotypes: [],
+    sireGroups: [],
+    sexes: [],
+  };
   const groups = addSireGroups(graph, members);
   const sexes = addSexes(graph, input, members);
   const evidenceOf = sortEvidence(input, members);
@@ -55,7 +62,11 @@ function addSireGroups(graph: PedigreeGraph, members: readonly PedigreeMember[])
     const known = groups.get(group);
     if (known) {
       if (known.candidates.join('\n') !== candidates.join('\n')) {
-        throw new GeneticsError('evidence', animal.id, `${animal.id} has other possible sires than the rest of "${group}".`);
+        throw new GeneticsError(
+          'evidence',
+          animal.id,
+          `${animal.id} has other possible sires than the rest of "${group}".`,
+        );
       }
       continue;
     }
@@ -67,7 +78,11 @@ function addSireGroups(graph: PedigreeGraph, members: readonly PedigreeMember[])
   return groups;
 }
 
-function addSexes(graph: PedigreeGraph, { loci }: PedigreeInput, members: readonly PedigreeMember[]): Map<string, number> {
+function addSexes(
+  graph: PedigreeGraph,
+  { loci }: PedigreeInput,
+  members: readonly PedigreeMember[],
+): Map<string, number> {
   const sexes = new Map<string, number>();
   if (!loci.some(isSexLinked)) return sexes;
   for (const { id, sex } of members) {
@@ -85,8 +100,10 @@ function sortEvidence(input: PedigreeInput, members: readonly PedigreeMember[]):
   const loci = new Set(input.loci.map(({ id }) => id));
   const sorted = new Map<string, Evidence[]>();
   for (const entry of input.evidence) {
-    if (!animals.has(entry.animal)) throw new GeneticsError('evidence', entry.animal, `"${entry.animal}" is not in the pedigree.`);
-    if (!loci.has(entry.locus)) throw new GeneticsError('evidence', entry.locus, `"${entry.locus}" is no locus here.`);
+    if (!animals.has(entry.animal))
+      throw new GeneticsError('evidence', entry.animal, `"${entry.animal}" is not in the pedigree.`);
+    if (!loci.has(entry.locus))
+      throw new GeneticsError('evidence', entry.locus, `"${entry.locus}" is no locus here.`);
     const key = `${entry.locus}\n${entry.animal}`;
     const known = sorted.get(key);
     if (known) known.push(entry);
@@ -95,7 +112,10 @@ function sortEvidence(input: PedigreeInput, members: readonly PedigreeMember[]):
   return sorted;
 }
 
-function readFrequencies(locus: LocusDefinition, given: Readonly<Record<string, number>> | undefined): number[] {
+function readFrequencies(
+  locus: LocusDefinition,
+  given: Readonly<Record<string, number>> | undefined,
+): number[] {
   const chosen = given ?? rareMutants(locus);
   for (const symbol of Object.keys(chosen)) {
     if (!locus.alleles.some((allele) => allele.symbol === symbol)) {
@@ -105,7 +125,11 @@ function readFrequencies(locus: LocusDefinition, given: Readonly<Record<string, 
   const frequencies = locus.alleles.map(({ symbol }) => chosen[symbol] ?? 0);
   const total = frequencies.reduce((a, b) => a + b, 0);
   if (frequencies.some((value) => !(value >= 0)) || Math.abs(total - 1) > 1e-9) {
-    throw new GeneticsError('probability', locus.id, `The allele frequencies at ${locus.name} add up to ${total}, not 1.`);
+    throw new GeneticsError(
+      'probability',
+      locus.id,
+      `The allele frequencies at ${locus.name} add up to ${total}, not 1.`,
+    );
   }
   return frequencies;
 }
@@ -144,7 +168,8 @@ function addLocus(
     if (sex !== undefined && isSexLinked(locus)) addSexSwitch(graph, sexSystem, variable, states, sex);
   }
   // A parent is placed before its young only by chance, so young are joined once all are placed.
-  for (const animal of members) if (!isFounder(animal)) addYoung(graph, locus, sexSystem, animal, placed, groups, frequencies);
+  for (const animal of members)
+    if (!isFounder(animal)) addYoung(graph, locus, sexSystem, animal, placed, groups, frequencies);
 }
 
 function isFounder(animal: PedigreeMember): boolean {
@@ -152,9 +177,17 @@ function isFounder(animal: PedigreeMember): boolean {
 }
 
 /** Ties the number of copies to the sex. */
-function addSexSwitch(graph: PedigreeGraph, system: SexSystem, variable: number, states: readonly Genotype[], sex: number): void {
+function addSexSwitch(
+  graph: PedigreeGraph,
+  system: SexSystem,
+  variable: number,
+  states: readonly Genotype[],
+  sex: number,
+): void {
   const single = system === 'XY' ? 0 : 1;
-  const table = states.flatMap((state) => [0, 1].map((value) => ((allelesOf(state).length === 1) === (value === single) ? 1 : 0)));
+  const table = states.flatMap((state) =>
+    [0, 1].map((value) => ((allelesOf(state).length === 1) === (value === single) ? 1 : 0)),
+  );
   graph.factors.push({ variables: [variable, sex], table: Float64Array.from(table) });
 }
 
@@ -185,7 +218,9 @@ function addYoung(
     : ((animal.sire == null ? undefined : placed.get(animal.sire)) ?? unknown);
   const mother = dam ?? unknown;
   const table = sire.gametes.flatMap((paternal) =>
-    mother.gametes.flatMap((maternal) => young.states.map((state) => chanceOfYoung(locus, system, state, paternal, maternal))),
+    mother.gametes.flatMap((maternal) =>
+      young.states.map((state) => chanceOfYoung(locus, system, state, paternal, maternal)),
+    ),
   );
   const variables = [sire.variable, mother.variable, young.variable].filter((variable) => variable >= 0);
   graph.factors.push({ variables, table: Float64Array.from(table) });
@@ -203,9 +238,17 @@ function addPaternalAllele(
     const candidate = placed.get(id);
     if (!candidate) return;
     const table = group.candidates.flatMap((_, chosen) =>
-      candidate.gametes.flatMap((gametes) => locus.alleles.map((_allele, a) => (chosen === index ? (gametes[a] ?? 0) : 1))),
+      candidate.gametes.flatMap((gametes) =>
+        locus.alleles.map((_allele, a) => (chosen === index ? (gametes[a] ?? 0) : 1)),
+      ),
     );
-    graph.factors.push({ variables: [group.variable, candidate.variable, variable], table: Float64Array.from(table) });
+    graph.factors.push({
+      variables: [group.variable, candidate.variable, variable],
+      table: Float64Array.from(table),
+    });
   });
-  return { variable, gametes: locus.alleles.map((_, a) => locus.alleles.map((_allele, b) => (a === b ? 1 : 0))) };
+  return {
+    variable,
+    gametes: locus.alleles.map((_, a) => locus.alleles.map((_allele, b) => (a === b ? 1 : 0))),
+  };
 }

@@ -9,7 +9,8 @@ import type { PedigreeMember } from './pedigree-input';
 export function checkMembers(animals: readonly PedigreeMember[]): PedigreeMember[] {
   const byId = new Map<string, PedigreeMember>();
   for (const animal of animals) {
-    if (byId.has(animal.id)) throw new GeneticsError('evidence', animal.id, `"${animal.id}" is listed twice.`);
+    if (byId.has(animal.id))
+      throw new GeneticsError('evidence', animal.id, `"${animal.id}" is listed twice.`);
     byId.set(animal.id, animal);
   }
   const asParent = (id: string, sex: 'male' | 'female', young: string) => {
@@ -26,11 +27,19 @@ export function checkMembers(animals: readonly PedigreeMember[]): PedigreeMember
       const chances = Object.values(animal.sires);
       const total = chances.reduce((a, b) => a + b, 0);
       if (chances.some((chance) => !(chance >= 0)) || Math.abs(total - 1) > 1e-9) {
-        throw new GeneticsError('probability', animal.id, `The chances of the sires of ${animal.id} add up to ${total}, not 1.`);
+        throw new GeneticsError(
+          'probability',
+          animal.id,
+          `The chances of the sires of ${animal.id} add up to ${total}, not 1.`,
+        );
       }
     }
     if (animal.retention !== undefined && !(animal.retention >= 0 && animal.retention <= 1)) {
-      throw new GeneticsError('probability', animal.id, `The retention of ${animal.id} is ${animal.retention}, not from 0 to 1.`);
+      throw new GeneticsError(
+        'probability',
+        animal.id,
+        `The retention of ${animal.id} is ${animal.retention}, not from 0 to 1.`,
+      );
     }
     for (const id of siresOf(animal)) asParent(id, 'male', animal.id);
     if (animal.dam != null) asParent(animal.dam, 'female', animal.id);
@@ -51,10 +60,14 @@ function refuseCircles(byId: ReadonlyMap<string, PedigreeMember>): void {
     const path: { id: string; parents: string[] }[] = [];
     const enter = (id: string) => {
       if (state.get(id) === 'done') return;
-      if (state.get(id) === 'open') throw new GeneticsError('parent-order', id, `"${id}" would be its own ancestor.`);
+      if (state.get(id) === 'open')
+        throw new GeneticsError('parent-order', id, `"${id}" would be its own ancestor.`);
       state.set(id, 'open');
       const animal = byId.get(id);
-      path.push({ id, parents: animal ? [...siresOf(animal), ...(animal.dam == null ? [] : [animal.dam])] : [] });
+      path.push({
+        id,
+        parents: animal ? [...siresOf(animal), ...(animal.dam == null ? [] : [animal.dam])] : [],
+      });
     };
     enter(start);
     for (let top = path.at(-1); top; top = path.at(-1)) {

@@ -5,7 +5,11 @@ import type { Evidence } from './pedigree-input';
 
 function checkChance(value: number, evidence: Evidence, what: string): number {
   if (value >= 0 && value <= 1) return value;
-  throw new GeneticsError('probability', evidence.animal, `The ${what} of ${evidence.animal} is ${value}, not from 0 to 1.`);
+  throw new GeneticsError(
+    'probability',
+    evidence.animal,
+    `The ${what} of ${evidence.animal} is ${value}, not from 0 to 1.`,
+  );
 }
 
 function readChances(
@@ -21,7 +25,11 @@ function readChances(
   }
   const total = [...chances.values()].reduce((a, b) => a + b, 0);
   if (Math.abs(total - 1) > 1e-9) {
-    throw new GeneticsError('probability', evidence.animal, `The chances of ${evidence.animal} at ${locus.name} add up to ${total}, not 1.`);
+    throw new GeneticsError(
+      'probability',
+      evidence.animal,
+      `The chances of ${evidence.animal} at ${locus.name} add up to ${total}, not 1.`,
+    );
   }
   return chances;
 }
@@ -30,13 +38,23 @@ function readChances(
  * Probability of the evidence for each genotype, up to a factor.
  * @param genotypes the animal's possible genotypes
  */
-function weightOf(locus: LocusDefinition, sex: Sex, system: SexSystem, genotypes: readonly Genotype[], evidence: Evidence): number[] {
+function weightOf(
+  locus: LocusDefinition,
+  sex: Sex,
+  system: SexSystem,
+  genotypes: readonly Genotype[],
+  evidence: Evidence,
+): number[] {
   switch (evidence.kind) {
     case 'phenotype': {
       const wrong = checkChance(evidence.mislabelling ?? 0, evidence, 'mislabelling rate');
       const known = phenotypesOf(locus);
       if (!known.includes(evidence.phenotype)) {
-        throw new GeneticsError('evidence', evidence.animal, `${locus.name} cannot show "${evidence.phenotype || 'normal'}" (${evidence.animal}).`);
+        throw new GeneticsError(
+          'evidence',
+          evidence.animal,
+          `${locus.name} cannot show "${evidence.phenotype || 'normal'}" (${evidence.animal}).`,
+        );
       }
       return genotypes.map((genotype) => {
         const right = phenotypeChances(locus, genotype).get(evidence.phenotype)?.valueOf() ?? 0;
@@ -50,7 +68,9 @@ function weightOf(locus: LocusDefinition, sex: Sex, system: SexSystem, genotypes
         const copies = allelesOf(genotype).length;
         return genotypes.filter((other) => allelesOf(other).length === copies).length - 1;
       };
-      return genotypes.map((genotype) => (genotype === found ? 1 - error : error / Math.max(1, others(genotype))));
+      return genotypes.map((genotype) =>
+        genotype === found ? 1 - error : error / Math.max(1, others(genotype)),
+      );
     }
     case 'prior': {
       const chances = readChances(locus, sex, system, evidence);
@@ -65,8 +85,14 @@ function weightOf(locus: LocusDefinition, sex: Sex, system: SexSystem, genotypes
 }
 
 /** Hardy–Weinberg chance of a genotype. */
-export function hardyWeinberg(locus: LocusDefinition, frequencies: readonly number[], genotype: Genotype): number {
-  const [first = 0, second] = allelesOf(genotype).map((allele) => locus.alleles.findIndex(({ symbol }) => symbol === allele));
+export function hardyWeinberg(
+  locus: LocusDefinition,
+  frequencies: readonly number[],
+  genotype: Genotype,
+): number {
+  const [first = 0, second] = allelesOf(genotype).map((allele) =>
+    locus.alleles.findIndex(({ symbol }) => symbol === allele),
+  );
   const p = frequencies[first] ?? 0;
   if (second === undefined) return p;
   return p * (frequencies[second] ?? 0) * (first === second ? 1 : 2);

@@ -33,7 +33,11 @@ interface Clique {
  * @param sizes number of states per variable
  * @throws {GeneticsError} 'too-large' when a table would pass `largest` entries
  */
-export function calibrate(sizes: readonly number[], factors: readonly Factor[], largest = LARGEST_TABLE): Calibrated {
+export function calibrate(
+  sizes: readonly number[],
+  factors: readonly Factor[],
+  largest = LARGEST_TABLE,
+): Calibrated {
   const order = eliminationOrder(sizes, factors);
   const rank = new Int32Array(sizes.length);
   order.forEach(({ variable }, i) => (rank[variable] = i));
@@ -49,7 +53,11 @@ export function calibrate(sizes: readonly number[], factors: readonly Factor[], 
     const variables = [...neighbours, variable];
     const entries = variables.reduce((product, each) => product * (sizes[each] ?? 1), 1);
     if (entries > largest) {
-      throw new GeneticsError('too-large', 'pedigree', `The animals are too entangled: a table of ${entries} entries would be needed.`);
+      throw new GeneticsError(
+        'too-large',
+        'pedigree',
+        `The animals are too entangled: a table of ${entries} entries would be needed.`,
+      );
     }
     const table = new Float64Array(entries).fill(1);
     for (const factor of assigned[i] ?? []) multiplyInto(table, variables, sizes, factor);
@@ -73,7 +81,11 @@ export function calibrate(sizes: readonly number[], factors: readonly Factor[], 
 }
 
 /** The pass down: every clique's table becomes the joint posterior of its variables. */
-function distribute(sizes: readonly number[], order: readonly Elimination[], cliques: readonly Clique[]): Float64Array[] {
+function distribute(
+  sizes: readonly number[],
+  order: readonly Elimination[],
+  cliques: readonly Clique[],
+): Float64Array[] {
   const marginals: Float64Array[] = sizes.map(() => new Float64Array(0));
   for (let i = cliques.length - 1; i >= 0; i -= 1) {
     const clique = cliques[i];
@@ -97,14 +109,24 @@ function distribute(sizes: readonly number[], order: readonly Elimination[], cli
 }
 
 /** Multiplies a factor into a table whose variables include the factor's. */
-function multiplyInto(table: Float64Array, variables: readonly number[], sizes: readonly number[], factor: Factor): void {
+function multiplyInto(
+  table: Float64Array,
+  variables: readonly number[],
+  sizes: readonly number[],
+  factor: Factor,
+): void {
   walk(variables, factor.variables, sizes, (at, inFactor) => {
     table[at] = (table[at] ?? 0) * (factor.table[inFactor] ?? 0);
   });
 }
 
 /** Sums a table over all but the given of its variables. */
-function sumOnto(table: Float64Array, variables: readonly number[], kept: readonly number[], sizes: readonly number[]): Float64Array {
+function sumOnto(
+  table: Float64Array,
+  variables: readonly number[],
+  kept: readonly number[],
+  sizes: readonly number[],
+): Float64Array {
   const result = new Float64Array(kept.reduce((product, variable) => product * (sizes[variable] ?? 1), 1));
   walk(variables, kept, sizes, (at, inResult) => {
     result[inResult] = (result[inResult] ?? 0) + (table[at] ?? 0);

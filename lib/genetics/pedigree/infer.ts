@@ -34,7 +34,14 @@ export function inferPedigree(input: PedigreeInput): PedigreePosterior {
   if (!impossible) {
     for (const { locus, animal, variable, states } of graph.genotypes) {
       const chances = marginals[variable];
-      beliefs.get(locus)?.set(animal, new Map(states.flatMap((state, i) => ((chances?.[i] ?? 0) > 0 ? [[state, chances?.[i] ?? 0]] : []))));
+      beliefs
+        .get(locus)
+        ?.set(
+          animal,
+          new Map(
+            states.flatMap((state, i) => ((chances?.[i] ?? 0) > 0 ? [[state, chances?.[i] ?? 0]] : [])),
+          ),
+        );
     }
     for (const { group, variable, candidates } of graph.sireGroups) {
       sires.set(group, new Map(candidates.map((id, i) => [id, marginals[variable]?.[i] ?? 0])));

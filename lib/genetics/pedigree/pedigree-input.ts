@@ -57,5 +57,7 @@ export const RARE = 0.005;
 /** Frequencies that make each mutant rare. */
 export function rareMutants(locus: LocusDefinition, each = RARE): Record<string, number> {
   const mutants = locus.alleles.length - 1;
-  return Object.fromEntries(locus.alleles.map(({ symbol }, i) => [symbol, i === 0 ? 1 - each * mutants : each]));
+  return Object.fromEntries(
+    locus.alleles.map(({ symbol }, i) => [symbol, i === 0 ? 1 - each * mutants : each]),
+  );
 }

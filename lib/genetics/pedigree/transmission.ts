@@ -7,7 +7,9 @@ export type AlleleChances = readonly number[];
 /** What a genotype hands on. */
 export function handedOn(locus: LocusDefinition, genotype: Genotype): number[] {
   const alleles = allelesOf(genotype);
-  return locus.alleles.map(({ symbol }) => alleles.filter((allele) => allele === symbol).length / alleles.length);
+  return locus.alleles.map(
+    ({ symbol }) => alleles.filter((allele) => allele === symbol).length / alleles.length,
+  );
 }
 
 /** Chance of a genotype when one allele comes from each side, or the only one from the side that gives it. */
@@ -18,7 +20,9 @@ export function chanceOfYoung(
   paternal: AlleleChances,
   maternal: AlleleChances,
 ): number {
-  const [first = 0, second] = allelesOf(young).map((allele) => locus.alleles.findIndex(({ symbol }) => symbol === allele));
+  const [first = 0, second] = allelesOf(young).map((allele) =>
+    locus.alleles.findIndex(({ symbol }) => symbol === allele),
+  );
   // One copy: a son's X is his dam's, a ZW daughter's Z her sire's.
   if (second === undefined) return (system === 'XY' ? maternal : paternal)[first] ?? 0;
   const straight = (paternal[first] ?? 0) * (maternal[second] ?? 0);
