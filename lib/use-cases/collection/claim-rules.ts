@@ -29,7 +29,8 @@ export function checkClaims(species: Pick<SpeciesBeliefs, 'loci' | 'sexSystem'>,
 
 function checkLooks(species: Pick<SpeciesBeliefs, 'sexSystem'>, { name, definition }: BeliefLocus, sex: Sex, { shows }: LocusClaim, fail: (message: string) => void): void {
   if (shows === null) return;
-  const looks = new Set(genotypesOf(definition, sex, species.sexSystem).flatMap((genotype) => [...phenotypeChances(definition, genotype).keys()]));
+  const living = genotypesOf(definition, sex, species.sexSystem).filter((genotype) => !isLethal(definition, genotype));
+  const looks = new Set(living.flatMap((genotype) => [...phenotypeChances(definition, genotype).keys()]));
   if (!looks.has(shows)) {
     const known = [...looks].map((look) => look || 'normal').join(', ');
     fail(`${shows ? `"${shows}"` : 'looking normal'} is no look of ${name} in ${sex === 'unknown' ? 'this species' : `a ${sex}`}; it can be ${known}.`);
