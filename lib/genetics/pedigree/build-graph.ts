@@ -3,7 +3,7 @@ import { allelesOf, genotypesOf, isSexLinked } from '../genotype';
 import type { Genotype, LocusDefinition, SexSystem } from '../locus';
 import { checkMembers } from './check-members';
 import { localWeights } from './evidence-weight';
-import type { Factor } from './factor-graph';
+import type { Factor } from './factor';
 import { rareMutants, type Evidence, type PedigreeInput, type PedigreeMember } from './pedigree-input';
 import { chanceOfParthenogenetic, chanceOfYoung, handedOn } from './transmission';
 

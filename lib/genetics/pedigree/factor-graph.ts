@@ -1,10 +1,6 @@
 import { GeneticsError } from '../genetics-error';
-
-/** A non-negative function of a few discrete variables: the last variable runs fastest in the table. */
-export interface Factor {
-  variables: readonly number[];
-  table: Float64Array;
-}
+import type { Factor } from './factor';
+import { reduceStates } from './reduce-states';
 
 export interface Calibrated {
   /** Natural logarithm of the probability of all evidence; −Infinity when it is impossible. */
@@ -38,6 +34,20 @@ export function calibrate(
   factors: readonly Factor[],
   largest = LARGEST_TABLE,
 ): Calibrated {
+  const reduced = reduceStates(sizes, factors);
+  if (reduced.kept.some(({ length }) => length === 0)) return { logLikelihood: -Infinity, marginals: [] };
+  const { logLikelihood, marginals } = eliminate(reduced.sizes, reduced.factors, largest);
+  return {
+    logLikelihood: logLikelihood + reduced.logConstant,
+    marginals: marginals.map((marginal, variable) => {
+      const full = new Float64Array(sizes[variable] ?? 0);
+      reduced.kept[variable]?.forEach((state, i) => (full[state] = marginal[i] ?? 0));
+      return full;
+    }),
+  };
+}
+
+function eliminate(sizes: readonly number[], factors: readonly Factor[], largest: number): Calibrated {
   const order = eliminationOrder(sizes, factors);
   const rank = new Int32Array(sizes.length);
   order.forEach(({ variable }, i) => (rank[variable] = i));
