@@ -11,7 +11,7 @@ import { knownDate } from './animal-rules';
 import { claimToText } from './claim-text';
 import { writeCsv } from './csv-text';
 import { beliefsOf, findAnimals } from './find-animals';
-import { groupBy } from './group-by';
+import { groupBy } from '../genetics/group-by';
 
 /** A member takes animals away as a CSV file that can be imported again. Relatives that they may not see are left out. */
 export const exportAnimalsUseCase = workspaceUseCase(exportAnimals, async (world, { query }) => {

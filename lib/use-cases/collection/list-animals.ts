@@ -3,7 +3,7 @@ import { countVisibleAnimals, loadRowExtras } from '@/db/queries/animals';
 import { listAnimals } from '@/lib/contracts/animal-list';
 import { workspaceUseCase } from '../world';
 import { findAnimals } from './find-animals';
-import { groupBy } from './group-by';
+import { groupBy } from '../genetics/group-by';
 
 /** A member looks through the animals they may see. */
 export const listAnimalsUseCase = workspaceUseCase(listAnimals, async (world, { query }) => {

@@ -9,7 +9,7 @@ import { loadBeliefs } from '../genetics/pedigree-beliefs';
 import { notFound } from '../refusal';
 import { workspaceUseCase } from '../world';
 import { chooseLineage, parentsOf, relationFinder, type PedigreeLinks } from './choose-lineage';
-import { groupBy } from './group-by';
+import { groupBy } from '../genetics/group-by';
 
 /** A member looks at the lineage of an animal, or of a whole species, as far as they may see it. */
 export const showLineageUseCase = workspaceUseCase(showLineage, async ({ tx, sees }, { query }) => {

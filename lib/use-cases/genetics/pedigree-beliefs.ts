@@ -5,8 +5,10 @@ import type { LocusClaim } from '@/lib/contracts/animal';
 import type { AnimalId, LocusId, SpeciesId } from '@/lib/contracts/ids';
 import { describeAnimal } from '@/lib/genetics/describe';
 import { notFound } from '../refusal';
+import { groupBy } from './group-by';
 import { isShown, wordsOf } from './copies';
-import { inferGenotype, mixOdds, type Odds } from './pass-down';
+import { inferLocus, type PedigreeAnimal } from './infer-locus';
+import type { Odds } from './pass-down';
 import type { LocusBelief, SpeciesBeliefs } from './species-beliefs';
 
 /** Results by species, each with the state of the data that it was computed from. Few, as each holds a whole pedigree. */
@@ -38,35 +40,24 @@ type Pedigree = Awaited<ReturnType<typeof loadPedigree>>;
 type Claims = Awaited<ReturnType<typeof loadClaims>>;
 
 function inferBeliefs({ species, loci, combinations }: Loaded, { rows, possibleSires }: Pedigree, claimRows: Claims): SpeciesBeliefs {
-  const claims = new Map<string, LocusClaim>(claimRows.map((row) => [`${row.animalId} ${row.locusId}`, row.claim]));
-  const byId = new Map(rows.map((row) => [row.id, row]));
-  const sires = new Map<AnimalId, { sireId: AnimalId; weight: number }[]>();
-  for (const { animalId, ...sire } of possibleSires) sires.set(animalId, [...(sires.get(animalId) ?? []), sire]);
-  const definitions = new Map(loci.map((locus) => [locus.id, locus.definition]));
-  const known = new Map<string, Odds>();
+  const sires = groupBy(possibleSires, (row) => row.animalId);
+  const animals = rows.map(({ id, sex, sireId, damId }): PedigreeAnimal => ({ id, sex, sireId, damId, possibleSires: sires.get(id) ?? [] }));
+  const byId = new Map(animals.map((animal) => [animal.id, animal]));
+  const claimsAt = new Map<LocusId, Map<AnimalId, LocusClaim>>(loci.map(({ id }) => [id, new Map()]));
+  for (const { animalId, locusId, claim } of claimRows) claimsAt.get(locusId)?.set(animalId, claim);
+  // A locus is computed for the whole pedigree at once, when the first animal is asked for.
+  const computed = new Map<LocusId, ReadonlyMap<AnimalId, Odds>>();
 
   const odds = (animalId: AnimalId, locusId: LocusId): Odds => {
-    const key = `${animalId} ${locusId}`;
-    const there = known.get(key);
-    if (there) return there;
-    const row = byId.get(animalId);
-    const definition = definitions.get(locusId);
-    if (!row || !definition) throw new RangeError(`No animal ${animalId} or locus ${locusId} in this species.`);
-    const several = sires.get(animalId) ?? [];
-    const inferred = inferGenotype(definition, species.sexSystem, {
-      sex: row.sex,
-      claim: claims.get(key) ?? null,
-      sire: row.sireId
-        ? odds(row.sireId, locusId)
-        : mixOdds(several.map(({ sireId, weight }) => ({ odds: odds(sireId, locusId), weight }))),
-      dam: row.damId ? odds(row.damId, locusId) : null,
-    });
-    known.set(key, inferred);
-    return inferred;
+    const locus = loci.find(({ id }) => id === locusId);
+    if (!locus || !byId.has(animalId)) throw new RangeError(`No animal ${animalId} or locus ${locusId} in this species.`);
+    const all = computed.get(locusId) ?? inferLocus(locus.definition, species.sexSystem, animals, claimsAt.get(locusId) ?? new Map());
+    computed.set(locusId, all);
+    return all.get(animalId) ?? new Map();
   };
 
   const belief = (animalId: AnimalId, locusId: LocusId): LocusBelief => {
-    const claim = claims.get(`${animalId} ${locusId}`) ?? null;
+    const claim = claimsAt.get(locusId)?.get(animalId) ?? null;
     const row = byId.get(animalId);
     const hasParents = Boolean(row?.sireId ?? row?.damId) || sires.has(animalId);
     return {
@@ -86,7 +77,7 @@ function inferBeliefs({ species, loci, combinations }: Loaded, { rows, possibleS
     describe: (animalId) => {
       const said = described.get(animalId) ??
         describeAnimal(
-          loci.map(({ id, definition }) => ({ locus: definition, shown: claims.get(`${animalId} ${id}`)?.shows ?? null, belief: odds(animalId, id) })),
+          loci.map(({ id, definition }) => ({ locus: definition, shown: claimsAt.get(id)?.get(animalId)?.shows ?? null, belief: odds(animalId, id) })),
           combinations,
         );
       described.set(animalId, said);
