@@ -1,6 +1,5 @@
 import { GeneticsError } from '../genetics-error';
 import type { Factor } from './factor';
-import { reduceStates } from './reduce-states';
 
 export interface Calibrated {
   /** Natural logarithm of the probability of all evidence; −Infinity when it is impossible. */
@@ -34,20 +33,6 @@ export function calibrate(
   factors: readonly Factor[],
   largest = LARGEST_TABLE,
 ): Calibrated {
-  const reduced = reduceStates(sizes, factors);
-  if (reduced.kept.some(({ length }) => length === 0)) return { logLikelihood: -Infinity, marginals: [] };
-  const { logLikelihood, marginals } = eliminate(reduced.sizes, reduced.factors, largest);
-  return {
-    logLikelihood: logLikelihood + reduced.logConstant,
-    marginals: marginals.map((marginal, variable) => {
-      const full = new Float64Array(sizes[variable] ?? 0);
-      reduced.kept[variable]?.forEach((state, i) => (full[state] = marginal[i] ?? 0));
-      return full;
-    }),
-  };
-}
-
-function eliminate(sizes: readonly number[], factors: readonly Factor[], largest: number): Calibrated {
   const order = eliminationOrder(sizes, factors);
   const rank = new Int32Array(sizes.length);
   order.forEach(({ variable }, i) => (rank[variable] = i));

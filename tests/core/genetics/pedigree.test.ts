@@ -197,6 +197,20 @@ describe('inference over a pedigree', () => {
     ).toThrow(/female cannot be/);
   });
 
+  it('says what it could not compute, and computes the rest', () => {
+    const animals: PedigreeMember[] = [
+      { id: 's', sex: 'male' },
+      { id: 'd', sex: 'female' },
+      { id: 'y', sex: 'female', sire: 's', dam: 'd' },
+      { id: 'alone', sex: 'female' },
+    ];
+    const evidence: Evidence[] = [{ animal: 'alone', locus: 'r', kind: 'phenotype', phenotype: 'Pale' }];
+    const result = inferPedigree({ sexSystem: 'XY', loci: [recessive], animals, evidence, largestTable: 10 });
+    expect(result.tooEntangled.map(({ animal }) => animal).toSorted()).toEqual(['d', 's', 'y']);
+    expect(result.beliefs.get('r')?.get('alone')?.get('p/p')).toBe(1);
+    expect(result.beliefs.get('r')?.has('y')).toBe(false);
+  });
+
   it('answers ten loci over 393 related animals without delay', () => {
     const animals: PedigreeMember[] = [];
     const evidence: Evidence[] = [];
