@@ -98,7 +98,14 @@ export default async function startBuiltApp(project: TestProject): Promise<() =>
     const appUrl = `http://127.0.0.1:${ports.app}`;
     await runServerProgram('seeds/main.ts', env, { what: 'Sowing the demo data', logFile: log('seeds') });
     await Promise.all([
-      keep(startPayments({ port: ports.payments, appUrl, env, logFile: log('payments') })),
+      keep(
+        startPayments({
+          port: ports.payments,
+          appUrl,
+          env: { ...env, LOCAL_PAYMENTS_FOLDER: path.join(folder, 'payments') },
+          logFile: log('payments'),
+        }),
+      ),
       keep(startMail({ ...ports, folder: path.join(folder, 'mail'), env, logFile: log('mail') })),
     ]);
     await keep(startApp({ port: ports.app, env, logFile: log('app') }));
