@@ -1,0 +1,19 @@
+import type { Metadata } from 'next';
+import { notFound } from 'next/navigation';
+import { EditProjectScreen } from '@/components/projects/project-form';
+import { Prefetch, prefetched } from '@/lib/api/page';
+import { projectId } from '@/lib/contracts/ids';
+import { showProjectUseCase } from '@/lib/use-cases/projects/show-project';
+
+export const metadata: Metadata = { title: 'Edit project' };
+
+export default async function EditProjectPage(props: { params: Promise<{ workspace: string; project: string }> }) {
+  const { workspace, project } = await props.params;
+  const id = projectId.safeParse(project).data;
+  if (!id) notFound();
+  return (
+    <Prefetch from={`/${workspace}/projects/${id}/edit`} queries={[prefetched(showProjectUseCase, { params: { workspace, project: id } })]}>
+      <EditProjectScreen id={id} />
+    </Prefetch>
+  );
+}

@@ -1,0 +1,21 @@
+import { parseAsInteger, parseAsString, parseAsStringLiteral } from 'nuqs';
+import { pairingState } from '@/lib/contracts/pairing';
+import type { SeasonQuery } from '@/lib/client/season';
+
+/** What stands in the address of the season: its year, the filters and the chosen pairing. */
+export const seasonParams = {
+  season: parseAsInteger,
+  project: parseAsString,
+  party: parseAsString,
+  state: parseAsStringLiteral(pairingState.options),
+  pairing: parseAsString,
+};
+
+export type SeasonState = { season: number | null; project: string | null; party: string | null; state: (typeof pairingState.options)[number] | null; pairing: string | null };
+
+/** The query of an address; `of` leaves out what is only for the eye. */
+export function seasonQueryOf({ season, project, party, state }: Omit<SeasonState, 'pairing'>): SeasonQuery {
+  return { season: season ?? undefined, project: project ?? undefined, party: party ?? undefined, state: state ?? undefined };
+}
+
+export const isFiltered = ({ project, party, state }: Pick<SeasonState, 'project' | 'party' | 'state'>) => Boolean(project ?? party ?? state);
