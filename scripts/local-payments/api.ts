@@ -133,6 +133,8 @@ export async function answerApi(runtime: Runtime, inFlight: InFlight, call: ApiC
   try {
     const account = authenticate(call.headers.authorization);
     meetFault(runtime, call, 'before');
+    // First what became due: keys older than a day are forgotten by it.
+    runtime.refresh();
     const key = call.method === 'POST' ? (call.headers['idempotency-key']?.toString() ?? null) : null;
     if (key !== null && key.length > 255) {
       throw new ApiError(400, {
