@@ -68,18 +68,21 @@ export function outcomeTable(cross: Cross, options: OutcomeOptions): OutcomeTabl
   // Turns chances among eggs of a sex into chances among all eggs.
   const share = cross.sexLinked ? 0.5 : 1;
   const rows = sexes.flatMap(({ sex, computeAs, factor }) => {
-    let partial: { chance: Fraction; classes: BlockClass[] }[] = [{ chance: factor, classes: [] }];
+    let partial: { chance: Fraction; size: number; classes: BlockClass[] }[] = [
+      { chance: factor, size: factor.valueOf(), classes: [] },
+    ];
     for (const block of cross.blocks) {
       const classes = blockClasses(block, computeAs);
+      // Doubles are enough to rank; only what is kept is multiplied exactly.
       partial = partial
-        .flatMap((row) =>
-          classes.map((entry) => ({
-            chance: row.chance.mul(entry.chance),
-            classes: [...row.classes, entry],
-          })),
-        )
-        .toSorted((a, b) => b.chance.compare(a.chance))
-        .slice(0, limit);
+        .flatMap((row) => classes.map((entry) => ({ row, entry, size: row.size * entry.chance.valueOf() })))
+        .toSorted((a, b) => b.size - a.size)
+        .slice(0, limit)
+        .map(({ row, entry, size }) => ({
+          chance: row.chance.mul(entry.chance),
+          size,
+          classes: [...row.classes, entry],
+        }));
     }
     return partial.map(({ chance, classes }): OutcomeRow => {
       const phenotypes = Object.assign({}, ...classes.map(({ values }) => values)) as Record<
