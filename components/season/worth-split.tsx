@@ -14,29 +14,30 @@ export function WorthSplit({ proceeds, termsNumber }: { proceeds: Proceeds; term
   const parties = useParties();
   const shares = useShares();
   const money = (amount: number) => formatMoney(amount, proceeds.currency);
+  const strip = [
+    ...shares(proceeds.shares.map(({ partyId, amount }) => ({ partyId, parts: amount }))),
+    ...proceeds.steps.map(({ partyId, amount }) => ({ partner: partyId ? (parties.get(partyId)?.mark ?? 6) : 6, name: 'House share', parts: amount })),
+  ];
   return (
     <div className="flex flex-col gap-3">
-      <dl className="text-base">
-        <div className="flex justify-between gap-4">
-          <dt className="font-semibold">Expected proceeds</dt>
-          <dd className="font-mono font-semibold">{money(proceeds.expected)}</dd>
-        </div>
-        {proceeds.steps.map((step) => (
-          <div key={step.label} className="flex justify-between gap-4 text-ink-2">
-            <dt>{step.label}</dt>
-            <dd className="font-mono">{money(-step.amount)}</dd>
-          </div>
-        ))}
-      </dl>
-      <ShareStrip shares={shares(proceeds.shares.map(({ partyId, amount }) => ({ partyId, parts: amount })))} size="lg" label={`Shares of the proceeds by terms version ${termsNumber}`} />
+      <p className="flex justify-between gap-4 text-base font-semibold">
+        <span>Expected proceeds</span>
+        <span className="font-mono">{money(proceeds.expected)}</span>
+      </p>
+      {proceeds.expected > 0 ? <ShareStrip shares={strip} size="lg" label={`Shares of the proceeds by terms version ${termsNumber}`} /> : null}
       <ul className="divide-y divide-rule-2 text-base">
+        {proceeds.steps.map((step) => (
+          <li key={step.label} className="flex items-baseline justify-between gap-4 py-1.5">
+            <span className="min-w-0 text-ink-2">{step.label}</span>
+            <span className="font-mono whitespace-nowrap">{money(step.amount)}</span>
+          </li>
+        ))}
         {proceeds.shares.map((share) => (
           <li key={share.partyId} className="flex items-baseline justify-between gap-4 py-1.5">
             <span className="min-w-0">
-              <PartnerName partner={parties.get(share.partyId)?.mark ?? 6} name={share.name} />
-              <span className="text-ink-2">
-                {' '}
-                {share.why}
+              <PartnerName partner={parties.get(share.partyId)?.mark ?? 6} name={share.name} />{' '}
+              <span className="text-sm text-ink-2">
+                {share.parts} of {share.of}: {share.why}
               </span>
             </span>
             <span className="font-mono whitespace-nowrap">{money(share.amount)}</span>

@@ -1,12 +1,13 @@
 'use client';
 
-import { useQuery } from '@tanstack/react-query';
+import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import type { z } from 'zod';
 import type { ProjectId, TermsId } from '@/lib/contracts/ids';
 import { createProject, editProject, listProjects, showProject } from '@/lib/contracts/project';
 import { showWorkspace } from '@/lib/contracts/session';
-import { decideTerms, listTerms, proposeTerms, showTerms, withdrawTerms } from '@/lib/contracts/terms';
+import { decideTerms, listTerms, previewTerms, proposeTerms, showTerms, withdrawTerms } from '@/lib/contracts/terms';
 import { optionsOf, useContractMutation } from './queries';
+import { request, type RequestError } from './request';
 import { useWorkspaceSlug } from './workspace';
 
 const projectAnswers = [listProjects, showProject, showWorkspace];
@@ -36,3 +37,14 @@ export function useTerms(project: ProjectId, terms: TermsId) {
 export const useProposeTerms = () => useContractMutation(proposeTerms, termsAnswers);
 export const useDecideTerms = () => useContractMutation(decideTerms, termsAnswers);
 export const useWithdrawTerms = () => useContractMutation(withdrawTerms, termsAnswers);
+
+/** How an example sale would be split by drafted terms; the last answer stays while the next is fetched. */
+export function useTermsPreview(project: ProjectId, body: z.input<typeof previewTerms.body>) {
+  const workspace = useWorkspaceSlug();
+  return useQuery<z.output<typeof previewTerms.response>, RequestError>({
+    queryKey: [previewTerms.id, workspace, project, body],
+    queryFn: ({ signal }) => request(previewTerms, { params: { workspace, project }, body }, { signal }),
+    placeholderData: keepPreviousData,
+    retry: false,
+  });
+}
