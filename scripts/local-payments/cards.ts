@@ -105,7 +105,7 @@ export const testCards: readonly TestCard[] = [
 ];
 
 /** The check digit of card numbers (ISO/IEC 7812-1, Luhn's formula). */
-export function hasValidCheckDigit(digits: string): boolean {
+function hasValidCheckDigit(digits: string): boolean {
   let sum = 0;
   for (let at = 0; at < digits.length; at += 1) {
     const digit = Number(digits[digits.length - 1 - at]);

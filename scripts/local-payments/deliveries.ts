@@ -25,12 +25,7 @@ export interface Receiver {
 const sign = (secret: string, signed: string) => createHmac('sha256', secret).update(signed).digest('hex');
 
 /** The header over a body, for the time of this attempt. */
-export function signatureHeader(
-  secret: string,
-  now: number,
-  body: string,
-  how: Settings['signature'],
-): string {
+function signatureHeader(secret: string, now: number, body: string, how: Settings['signature']): string {
   const time = how === 'stale' ? now - 3_600 : now;
   const good = sign(secret, `${time}.${body}`);
   const other = sign(`${secret}_other`, `${time}.${body}`);

@@ -42,7 +42,7 @@ export interface Settings {
   latency: number;
 }
 
-export const defaultSettings: Settings = {
+const defaultSettings: Settings = {
   fee: { basisPoints: 290, fixed: 30 },
   disputeFee: 1500,
   returnsDisputeFee: false,
@@ -101,7 +101,7 @@ export interface Task {
   at: number;
 }
 
-export interface StoredAnswer {
+interface StoredAnswer {
   /** Of method, path and parameters. */
   fingerprint: string;
   status: number;

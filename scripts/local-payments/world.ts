@@ -14,7 +14,7 @@ function isPlain(value: unknown): value is Record<string, unknown> {
 }
 
 /** What `before` had where `after` differs, as `previous_attributes` gives it. */
-export function differences(before: unknown, after: unknown): Record<string, unknown> {
+function differences(before: unknown, after: unknown): Record<string, unknown> {
   const result: Record<string, unknown> = {};
   if (!isPlain(before) || !isPlain(after)) return result;
   for (const key of new Set([...Object.keys(before), ...Object.keys(after)])) {

@@ -17,7 +17,7 @@ export interface Received {
 }
 
 /** A stand-in for the app's webhook route. */
-export interface Receiver {
+interface Receiver {
   url: string;
   received: Received[];
   types: () => string[];
