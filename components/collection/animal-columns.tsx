@@ -46,7 +46,14 @@ export function animalColumns({
       cell: (row) => <span className="line-clamp-2">{row.description}</span>,
     },
     manySpecies
-      ? { id: 'species', header: 'Species', sortable: true, width: 'minmax(7rem, 1fr)', startsHidden: true, cell: (row) => row.species.name }
+      ? {
+          id: 'species',
+          header: 'Species',
+          sortable: true,
+          width: 'minmax(7rem, 1fr)',
+          startsHidden: true,
+          cell: (row) => row.species.name,
+        }
       : null,
     {
       id: 'hatched',
@@ -55,7 +62,13 @@ export function animalColumns({
       sortable: true,
       cell: (row) => (
         <>
-          <span>{row.hatchedOn ? sayHatched(row.hatchedOn, row.hatchedPrecision) : <span className="text-ink-3">not known</span>}</span>
+          <span>
+            {row.hatchedOn ? (
+              sayHatched(row.hatchedOn, row.hatchedPrecision)
+            ) : (
+              <span className="text-ink-3">not known</span>
+            )}
+          </span>
           <span className="text-sm text-ink-3">{sayAge(row.hatchedOn, today)}</span>
         </>
       ),
@@ -74,7 +87,9 @@ export function animalColumns({
           header: 'Place',
           width: '5.5rem',
           sortable: true,
-          cell: (row) => <span className="font-mono">{row.tub?.label ?? <span className="text-ink-3">–</span>}</span>,
+          cell: (row) => (
+            <span className="font-mono">{row.tub?.label ?? <span className="text-ink-3">–</span>}</span>
+          ),
         }
       : null,
     {
@@ -92,16 +107,25 @@ export function animalColumns({
       id: 'owners',
       header: 'Owned by',
       width: 'minmax(7rem, 1fr)',
-      cell: (row) => <ShareStrip shares={shares(row.owners)} label="Owned by" size="sm" className="w-full max-sm:w-32" />,
+      cell: (row) => (
+        <ShareStrip shares={shares(row.owners)} label="Owned by" size="sm" className="w-full max-sm:w-32" />
+      ),
     },
     {
       id: 'projects',
       header: 'Projects',
       width: 'minmax(8rem, 1fr)',
       startsHidden: true,
-      cell: (row) => row.projects.map(({ name }) => name).join(', ') || <span className="text-ink-3">none</span>,
+      cell: (row) =>
+        row.projects.map(({ name }) => name).join(', ') || <span className="text-ink-3">none</span>,
     },
-    { id: 'origin', header: 'Origin', width: '8rem', startsHidden: true, cell: (row) => originWords[row.origin] },
+    {
+      id: 'origin',
+      header: 'Origin',
+      width: '8rem',
+      startsHidden: true,
+      cell: (row) => originWords[row.origin],
+    },
   ];
   return columns.filter((column) => column !== null);
 }
@@ -110,7 +134,9 @@ function Thumbnail({ src }: { src: string | null }) {
   return (
     <span className="size-8 shrink-0 overflow-hidden rounded-md bg-track max-sm:size-10">
       {/* The route checks who asks, so the picture comes straight from it and not through the image optimiser. */}
-      {src ? <Image unoptimized src={src} alt="" width={64} height={64} className="size-full object-cover" /> : null}
+      {src ? (
+        <Image unoptimized src={src} alt="" width={64} height={64} className="size-full object-cover" />
+      ) : null}
     </span>
   );
 }

@@ -54,7 +54,12 @@ export function AnimalFilters({ state, onChange }: { state: ListState; onChange:
         className="w-auto min-w-28"
         value={state.sex}
         onChange={(event) => onChange({ sex: event.target.value as ListState['sex'] })}
-        options={[choice('Any sex'), { value: 'male', label: 'Males' }, { value: 'female', label: 'Females' }, { value: 'unknown', label: 'Unknown' }]}
+        options={[
+          choice('Any sex'),
+          { value: 'male', label: 'Males' },
+          { value: 'female', label: 'Females' },
+          { value: 'unknown', label: 'Unknown' },
+        ]}
       />
       {workspace.projects.length > 0 ? (
         <Select
@@ -62,7 +67,10 @@ export function AnimalFilters({ state, onChange }: { state: ListState; onChange:
           className="w-auto min-w-32"
           value={state.project}
           onChange={(event) => onChange({ project: event.target.value })}
-          options={[choice('Any project'), ...workspace.projects.map(({ id, name }) => ({ value: id, label: name }))]}
+          options={[
+            choice('Any project'),
+            ...workspace.projects.map(({ id, name }) => ({ value: id, label: name })),
+          ]}
         />
       ) : null}
       <Select
@@ -70,7 +78,10 @@ export function AnimalFilters({ state, onChange }: { state: ListState; onChange:
         className="w-auto min-w-32"
         value={state.holder}
         onChange={(event) => onChange({ holder: event.target.value })}
-        options={[choice('Any owner'), ...[...parties.values()].map(({ id, name }) => ({ value: id, label: name }))]}
+        options={[
+          choice('Any owner'),
+          ...[...parties.values()].map(({ id, name }) => ({ value: id, label: name })),
+        ]}
       />
       {loci.length > 0 ? (
         <>

@@ -49,14 +49,23 @@ export function AnimalFormFields({
       <Panel title="What it is">
         <div className="grid gap-4 sm:grid-cols-2">
           <Field label="Species" required error={messageFor('speciesId')}>
-            <Select {...register('speciesId')} placeholder="Choose …" options={species.map(({ id, name }) => ({ value: id, label: name }))} />
+            <Select
+              {...register('speciesId')}
+              placeholder="Choose …"
+              options={species.map(({ id, name }) => ({ value: id, label: name }))}
+            />
           </Field>
           <Field
             label="Code"
             hint={isNew && proposed ? `Left empty, it becomes ${proposed}, the next free one.` : undefined}
             error={messageFor('code')}
           >
-            <TextInput mono autoComplete="off" placeholder={isNew ? proposed : undefined} {...register('code')} />
+            <TextInput
+              mono
+              autoComplete="off"
+              placeholder={isNew ? proposed : undefined}
+              {...register('code')}
+            />
           </Field>
           <Field label="Name" optional error={messageFor('name')}>
             <TextInput {...register('name')} />
@@ -73,7 +82,11 @@ export function AnimalFormFields({
               />
             </Field>
             <Field label="Known by" optional error={messageFor('sexedBy')}>
-              <Select {...register('sexedBy')} placeholder="–" options={Object.entries(sexedByWords).map(([value, label]) => ({ value, label }))} />
+              <Select
+                {...register('sexedBy')}
+                placeholder="–"
+                options={Object.entries(sexedByWords).map(([value, label]) => ({ value, label }))}
+              />
             </Field>
           </div>
           <div className="grid grid-cols-[minmax(0,1.4fr)_minmax(0,1fr)] gap-3">
@@ -110,27 +123,49 @@ export function AnimalFormFields({
         </div>
         {values.origin === 'wild_caught' ? (
           <Notice tone="straw" className="mt-4">
-            Taking, importing and selling wild-caught animals is regulated. Keep the permits with its papers and ask the authority in charge.
+            Taking, importing and selling wild-caught animals is regulated. Keep the permits with its papers
+            and ask the authority in charge.
           </Notice>
         ) : null}
       </Panel>
 
-      <Panel title="What it looks like and carries" aside="A locus without a line counts as normal, or follows from the parents.">
-        <LociFields lines={values.loci} onChange={(lines) => set('loci', lines)} speciesId={values.speciesId} sex={values.sex} messageFor={messageFor} />
+      <Panel
+        title="What it looks like and carries"
+        aside="A locus without a line counts as normal, or follows from the parents."
+      >
+        <LociFields
+          lines={values.loci}
+          onChange={(lines) => set('loci', lines)}
+          speciesId={values.speciesId}
+          sex={values.sex}
+          messageFor={messageFor}
+        />
       </Panel>
 
       <Panel title="Parents">
         <div className="grid gap-4 sm:grid-cols-2">
           <Field label="Sire" optional error={messageFor('sireId')}>
-            <ParentPicker as="sire" speciesId={values.speciesId} value={values.sire} onChange={(choice) => set('sire', choice)} />
+            <ParentPicker
+              as="sire"
+              speciesId={values.speciesId}
+              value={values.sire}
+              onChange={(choice) => set('sire', choice)}
+            />
           </Field>
           <Field label="Dam" optional error={messageFor('damId')}>
-            <ParentPicker as="dam" speciesId={values.speciesId} value={values.dam} onChange={(choice) => set('dam', choice)} />
+            <ParentPicker
+              as="dam"
+              speciesId={values.speciesId}
+              value={values.dam}
+              onChange={(choice) => set('dam', choice)}
+            />
           </Field>
         </div>
         {values.sire === null ? (
           <div className="mt-4 flex flex-col gap-2">
-            {values.possibleSires.length ? <p className="text-sm font-semibold">Possible sires, with their odds against each other</p> : null}
+            {values.possibleSires.length ? (
+              <p className="text-sm font-semibold">Possible sires, with their odds against each other</p>
+            ) : null}
             {values.possibleSires.map((line, index) => (
               <div key={index} className="grid grid-cols-[minmax(0,1fr)_5rem_auto] items-center gap-2">
                 <ParentPicker
@@ -138,7 +173,12 @@ export function AnimalFormFields({
                   label={`Possible sire ${index + 1}`}
                   speciesId={values.speciesId}
                   value={line.choice}
-                  onChange={(choice) => set('possibleSires', values.possibleSires.map((one, at) => (at === index ? { ...one, choice } : one)))}
+                  onChange={(choice) =>
+                    set(
+                      'possibleSires',
+                      values.possibleSires.map((one, at) => (at === index ? { ...one, choice } : one)),
+                    )
+                  }
                 />
                 <TextInput
                   mono
@@ -146,27 +186,48 @@ export function AnimalFormFields({
                   aria-label={`Odds of possible sire ${index + 1}`}
                   value={line.weight}
                   onChange={(event) =>
-                    set('possibleSires', values.possibleSires.map((one, at) => (at === index ? { ...one, weight: event.target.value } : one)))
+                    set(
+                      'possibleSires',
+                      values.possibleSires.map((one, at) =>
+                        at === index ? { ...one, weight: event.target.value } : one,
+                      ),
+                    )
                   }
                 />
-                <IconButton label={`Remove possible sire ${index + 1}`} onClick={() => set('possibleSires', values.possibleSires.filter((_, at) => at !== index))}>
+                <IconButton
+                  label={`Remove possible sire ${index + 1}`}
+                  onClick={() =>
+                    set(
+                      'possibleSires',
+                      values.possibleSires.filter((_, at) => at !== index),
+                    )
+                  }
+                >
                   <X aria-hidden />
                 </IconButton>
-                {['animalId', 'weight'].map((part) => messageFor(`possibleSires.${index}.${part}`)).filter(Boolean).map((message) => (
-                  <p key={message} className="col-span-full text-sm font-medium text-alarm">
-                    {message}
-                  </p>
-                ))}
+                {['animalId', 'weight']
+                  .map((part) => messageFor(`possibleSires.${index}.${part}`))
+                  .filter(Boolean)
+                  .map((message) => (
+                    <p key={message} className="col-span-full text-sm font-medium text-alarm">
+                      {message}
+                    </p>
+                  ))}
               </div>
             ))}
-            {messageFor('possibleSires') ? <p className="text-sm font-medium text-alarm">{messageFor('possibleSires')}</p> : null}
+            {messageFor('possibleSires') ? (
+              <p className="text-sm font-medium text-alarm">{messageFor('possibleSires')}</p>
+            ) : null}
             <div>
               <Button
                 size="sm"
                 icon={<Plus aria-hidden />}
                 onClick={() => {
                   const line = { choice: null, weight: '1' };
-                  set('possibleSires', [...values.possibleSires, ...(values.possibleSires.length ? [line] : [line, line])]);
+                  set('possibleSires', [
+                    ...values.possibleSires,
+                    ...(values.possibleSires.length ? [line] : [line, line]),
+                  ]);
                 }}
               >
                 {values.possibleSires.length ? 'Another possible sire' : 'It was one of several sires'}
@@ -179,14 +240,29 @@ export function AnimalFormFields({
       {isNew ? (
         <Panel title="Whose it is">
           <div className="flex flex-col gap-4">
-            <PartsFields field="owners" lines={values.owners} onChange={(lines) => set('owners', lines)} parties={workspace.parties} messageFor={messageFor} />
+            <PartsFields
+              field="owners"
+              lines={values.owners}
+              onChange={(lines) => set('owners', lines)}
+              parties={workspace.parties}
+              messageFor={messageFor}
+            />
             <div className="grid gap-4 sm:grid-cols-2">
-              <Field label="Held from" optional hint="Its hatch date or today when left empty." error={messageFor('ownedFrom')}>
+              <Field
+                label="Held from"
+                optional
+                hint="Its hatch date or today when left empty."
+                error={messageFor('ownedFrom')}
+              >
                 <DateInput max={workspace.today} {...register('ownedFrom')} />
               </Field>
               {mayAdd && workspace.projects.length ? (
                 <Field label="Project" optional error={messageFor('projectId')}>
-                  <Select {...register('projectId')} placeholder="None" options={workspace.projects.map(({ id, name }) => ({ value: id, label: name }))} />
+                  <Select
+                    {...register('projectId')}
+                    placeholder="None"
+                    options={workspace.projects.map(({ id, name }) => ({ value: id, label: name }))}
+                  />
                 </Field>
               ) : null}
             </div>
@@ -197,14 +273,24 @@ export function AnimalFormFields({
       <Panel title="Where it is">
         <div className="grid gap-4 sm:grid-cols-3">
           <Field label="Status" error={messageFor('status')}>
-            <Select {...register('status')} options={animalStatus.options.map((value) => ({ value, label: statusWords[value] }))} />
+            <Select
+              {...register('status')}
+              options={animalStatus.options.map((value) => ({ value, label: statusWords[value] }))}
+            />
           </Field>
           <Field label="Since" optional error={messageFor('statusSince')}>
             <DateInput max={workspace.today} {...register('statusSince')} />
           </Field>
           {seesTubs ? (
             <Field label="Place" optional error={messageFor('tubId')}>
-              <Select {...register('tubId')} placeholder="None" options={tubs.map(({ id, label, rack, room }) => ({ value: id, label: `${label} · ${rack}, ${room}` }))} />
+              <Select
+                {...register('tubId')}
+                placeholder="None"
+                options={tubs.map(({ id, label, rack, room }) => ({
+                  value: id,
+                  label: `${label} · ${rack}, ${room}`,
+                }))}
+              />
             </Field>
           ) : null}
         </div>
@@ -223,7 +309,8 @@ export function AnimalFormFields({
 function HatchedInput({ values, onChange }: { values: AnimalFormValues; onChange: (day: string) => void }) {
   const { today } = useWorkspace();
   const { hatchedPrecision, hatchedOn } = values;
-  if (hatchedPrecision === 'day') return <DateInput value={hatchedOn} max={today} onChange={(event) => onChange(event.target.value)} />;
+  if (hatchedPrecision === 'day')
+    return <DateInput value={hatchedOn} max={today} onChange={(event) => onChange(event.target.value)} />;
   const isMonth = hatchedPrecision === 'month';
   return (
     <TextInput

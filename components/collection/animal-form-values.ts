@@ -82,7 +82,10 @@ export function valuesOf(animal: AnimalRecord): AnimalFormValues {
     notes: animal.notes,
     sire: choiceOf(animal.sire),
     dam: choiceOf(animal.dam),
-    possibleSires: animal.possibleSires.map(({ sire, weight }) => ({ choice: choiceOf(sire), weight: String(weight) })),
+    possibleSires: animal.possibleSires.map(({ sire, weight }) => ({
+      choice: choiceOf(sire),
+      weight: String(weight),
+    })),
     tubId: animal.tub?.id ?? '',
     loci: animal.loci.flatMap(({ locusId, claim }) => (claim ? [{ locusId, ...claim }] : [])),
   };
@@ -90,7 +93,11 @@ export function valuesOf(animal: AnimalRecord): AnimalFormValues {
 
 function hatchedDay({ hatchedOn, hatchedPrecision }: AnimalFormValues): string | null {
   if (!hatchedOn) return null;
-  return hatchedPrecision === 'year' ? `${hatchedOn}-01-01` : hatchedPrecision === 'month' ? `${hatchedOn}-01` : hatchedOn;
+  return hatchedPrecision === 'year'
+    ? `${hatchedOn}-01-01`
+    : hatchedPrecision === 'month'
+      ? `${hatchedOn}-01`
+      : hatchedOn;
 }
 
 /** What both forms send alike. Ids are checked by the contract. */
@@ -113,7 +120,10 @@ function commonBody(values: AnimalFormValues) {
 
 const idOf = (choice: ParentChoice) => (choice && choice !== 'hidden' ? choice.id : null);
 const siresOf = (values: AnimalFormValues) =>
-  values.possibleSires.map(({ choice, weight }) => ({ animalId: idOf(choice) ?? '', weight: /^\d+$/.test(weight) ? Number(weight) : 0 }));
+  values.possibleSires.map(({ choice, weight }) => ({
+    animalId: idOf(choice) ?? '',
+    weight: /^\d+$/.test(weight) ? Number(weight) : 0,
+  }));
 
 export function createBody(values: AnimalFormValues): z.input<typeof createAnimal.body> {
   return {
@@ -130,10 +140,30 @@ export function createBody(values: AnimalFormValues): z.input<typeof createAnima
 }
 
 /** Only what the person changed is sent, so that what they do not see stays as it is. */
-export function editBody(values: AnimalFormValues, before: AnimalFormValues, version: number): z.input<typeof editAnimal.body> {
-  const all = { ...commonBody(values), code: values.code, statusSince: values.statusSince || null, sireId: idOf(values.sire), damId: idOf(values.dam), possibleSires: siresOf(values) };
-  const was: Record<string, unknown> = { ...commonBody(before), code: before.code, statusSince: before.statusSince || null, sireId: idOf(before.sire), damId: idOf(before.dam), possibleSires: siresOf(before) };
-  const changed = Object.entries(all).filter(([name, value]) => JSON.stringify(value) !== JSON.stringify(was[name]));
+export function editBody(
+  values: AnimalFormValues,
+  before: AnimalFormValues,
+  version: number,
+): z.input<typeof editAnimal.body> {
+  const all = {
+    ...commonBody(values),
+    code: values.code,
+    statusSince: values.statusSince || null,
+    sireId: idOf(values.sire),
+    damId: idOf(values.dam),
+    possibleSires: siresOf(values),
+  };
+  const was: Record<string, unknown> = {
+    ...commonBody(before),
+    code: before.code,
+    statusSince: before.statusSince || null,
+    sireId: idOf(before.sire),
+    damId: idOf(before.dam),
+    possibleSires: siresOf(before),
+  };
+  const changed = Object.entries(all).filter(
+    ([name, value]) => JSON.stringify(value) !== JSON.stringify(was[name]),
+  );
   // A parent that is not shown counts as nothing above; taking it away is a change of its own.
   if (before.sire === 'hidden' && values.sire === null) changed.push(['sireId', null]);
   if (before.dam === 'hidden' && values.dam === null) changed.push(['damId', null]);
@@ -141,7 +171,10 @@ export function editBody(values: AnimalFormValues, before: AnimalFormValues, ver
 }
 
 /** What somebody else saved in the meantime, in the words of the form. */
-export function changedFields(before: AnimalFormValues, now: AnimalFormValues): { label: string; before: string; now: string }[] {
+export function changedFields(
+  before: AnimalFormValues,
+  now: AnimalFormValues,
+): { label: string; before: string; now: string }[] {
   const say = (value: unknown): string => {
     if (value === null || value === '' || value === undefined) return 'nothing';
     if (value === true) return 'yes';
@@ -151,8 +184,22 @@ export function changedFields(before: AnimalFormValues, now: AnimalFormValues): 
     return String(value).replaceAll('_', ' ');
   };
   const labels: Partial<Record<keyof AnimalFormValues, string>> = {
-    code: 'Code', name: 'Name', speciesId: 'Species', sex: 'Sex', sexedBy: 'Sex known by', hatchedOn: 'Hatched', origin: 'Origin', status: 'Status',
-    statusSince: 'Status since', heldBack: 'Held back', notes: 'Notes', sire: 'Sire', dam: 'Dam', possibleSires: 'Possible sires', tubId: 'Place', loci: 'Loci',
+    code: 'Code',
+    name: 'Name',
+    speciesId: 'Species',
+    sex: 'Sex',
+    sexedBy: 'Sex known by',
+    hatchedOn: 'Hatched',
+    origin: 'Origin',
+    status: 'Status',
+    statusSince: 'Status since',
+    heldBack: 'Held back',
+    notes: 'Notes',
+    sire: 'Sire',
+    dam: 'Dam',
+    possibleSires: 'Possible sires',
+    tubId: 'Place',
+    loci: 'Loci',
   };
   return (Object.keys(labels) as (keyof AnimalFormValues)[])
     .filter((name) => JSON.stringify(before[name]) !== JSON.stringify(now[name]))

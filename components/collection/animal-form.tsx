@@ -17,7 +17,14 @@ import { useWorkspace } from '@/lib/client/workspace';
 import { createAnimal, editAnimal, type AnimalRecord } from '@/lib/contracts/animal-record';
 import type { AnimalId } from '@/lib/contracts/ids';
 import { AnimalFormFields } from './animal-form-fields';
-import { changedFields, createBody, editBody, emptyValues, valuesOf, type AnimalFormValues } from './animal-form-values';
+import {
+  changedFields,
+  createBody,
+  editBody,
+  emptyValues,
+  valuesOf,
+  type AnimalFormValues,
+} from './animal-form-values';
 
 /** The form for a new animal. */
 export function NewAnimalScreen() {
@@ -25,7 +32,9 @@ export function NewAnimalScreen() {
   const species = useSpeciesList().data?.species ?? [];
   const router = useRouter();
   const create = useCreateAnimal();
-  const [initial] = useState(() => emptyValues(me.partyId, species.length === 1 ? (species[0]?.id ?? '') : ''));
+  const [initial] = useState(() =>
+    emptyValues(me.partyId, species.length === 1 ? (species[0]?.id ?? '') : ''),
+  );
   return (
     <>
       <PageHeader title="Add an animal" back={{ href: `/${slug}/collection`, label: 'Collection' }} />
@@ -65,7 +74,10 @@ export function EditAnimalScreen({ id }: { id: AnimalId }) {
   if (!base) return null;
   return (
     <>
-      <PageHeader title={`Edit ${base.code}`} back={{ href: `/${slug}/collection/${id}`, label: base.code }} />
+      <PageHeader
+        title={`Edit ${base.code}`}
+        back={{ href: `/${slug}/collection/${id}`, label: base.code }}
+      />
       <PageBody className="max-w-4xl">
         <EditAnimal base={base} onRebase={setBase} />
       </PageBody>
@@ -93,7 +105,8 @@ function EditAnimal({ base, onRebase }: { base: AnimalRecord; onRebase: (record:
           router.push(`/${slug}/collection/${base.id}`);
         },
         onError: (error) => {
-          if (error.problem.type === '/problems/stale') void query.refetch().then(({ data }) => setTheirs(data ?? null));
+          if (error.problem.type === '/problems/stale')
+            void query.refetch().then(({ data }) => setTheirs(data ?? null));
         },
       },
     );
@@ -182,11 +195,20 @@ function AnimalForm({ initial, isNew, busy, problem, check, onSave, onCancel }: 
 
   return (
     <form onSubmit={(event) => void submit(event)} className="flex flex-col gap-5" noValidate>
-      <FormErrorSummary message={errors.length ? undefined : problem?.detail} errors={errors.map(({ message }) => ({ message }))} />
+      <FormErrorSummary
+        message={errors.length ? undefined : problem?.detail}
+        errors={errors.map(({ message }) => ({ message }))}
+      />
       <AnimalFormFields form={form} isNew={isNew} messageFor={messageFor} />
       <Panel>
         <div className="flex flex-wrap justify-end gap-2">
-          <Button onClick={() => (!isDirty || window.confirm('Leave without saving what you typed?') ? onCancel() : undefined)}>Cancel</Button>
+          <Button
+            onClick={() =>
+              !isDirty || window.confirm('Leave without saving what you typed?') ? onCancel() : undefined
+            }
+          >
+            Cancel
+          </Button>
           <Button type="submit" tone="primary" busy={busy}>
             {isNew ? 'Add the animal' : 'Save'}
           </Button>
@@ -198,7 +220,8 @@ function AnimalForm({ initial, isNew, busy, problem, check, onSave, onCancel }: 
 
 /** An id that is missing reads as a choice that was not made. */
 function plainMessage(issue: { code: string; message: string; path: PropertyKey[] }): string {
-  if (issue.code === 'invalid_format' && issue.path.some((part) => String(part).endsWith('Id'))) return 'Choose one.';
+  if (issue.code === 'invalid_format' && issue.path.some((part) => String(part).endsWith('Id')))
+    return 'Choose one.';
   if (issue.code === 'invalid_format') return 'Write a whole date.';
   return issue.message;
 }

@@ -105,14 +105,21 @@ function AnimalDetails({ animal }: { animal: AnimalRecord }) {
               value: (
                 <span className="inline-flex items-center gap-2">
                   <Badge tone={statusTones[animal.status]}>{statusWords[animal.status]}</Badge>
-                  {animal.statusSince ? <span className="text-sm text-ink-3">since {sayDay(animal.statusSince)}</span> : null}
+                  {animal.statusSince ? (
+                    <span className="text-sm text-ink-3">since {sayDay(animal.statusSince)}</span>
+                  ) : null}
                 </span>
               ),
             },
-            { key: 'Hatched', value: `${sayHatched(animal.hatchedOn, animal.hatchedPrecision)}${age ? ` · ${age}` : ''}` },
+            {
+              key: 'Hatched',
+              value: `${sayHatched(animal.hatchedOn, animal.hatchedPrecision)}${age ? ` · ${age}` : ''}`,
+            },
             ...(animal.sexedBy ? [{ key: 'Sex known by', value: animal.sexedBy }] : []),
             { key: 'Origin', value: originWords[animal.origin] },
-            ...(animal.tub ? [{ key: 'Place', value: `${animal.tub.label} · ${animal.tub.rack}, ${animal.tub.room}` }] : []),
+            ...(animal.tub
+              ? [{ key: 'Place', value: `${animal.tub.label} · ${animal.tub.rack}, ${animal.tub.room}` }]
+              : []),
             ...(animal.heldBack ? [{ key: 'Held back', value: 'yes, not for sale' }] : []),
             {
               key: 'Projects',
@@ -120,7 +127,10 @@ function AnimalDetails({ animal }: { animal: AnimalRecord }) {
                 ? animal.projects.map((project, index) => (
                     <span key={project.id}>
                       {index > 0 ? ', ' : ''}
-                      <Link className="text-slate underline underline-offset-2" href={`/${slug}/season/projects/${project.id}`}>
+                      <Link
+                        className="text-slate underline underline-offset-2"
+                        href={`/${slug}/season/projects/${project.id}`}
+                      >
                         {project.name}
                       </Link>
                     </span>
@@ -129,7 +139,9 @@ function AnimalDetails({ animal }: { animal: AnimalRecord }) {
             },
           ]}
         />
-        {animal.notes ? <p className="mt-2 text-base whitespace-pre-wrap text-ink-2">{animal.notes}</p> : null}
+        {animal.notes ? (
+          <p className="mt-2 text-base whitespace-pre-wrap text-ink-2">{animal.notes}</p>
+        ) : null}
       </section>
       <WeightsSection animal={animal} />
       <OwnersSection animal={animal} />

@@ -20,7 +20,11 @@ import { statusWords } from './words';
 type Change = z.input<typeof changeAnimals.body>['change'];
 type Kind = Change['kind'];
 
-const titles: Record<Kind, string> = { status: 'Set the status', tub: 'Set the place', project: 'Add to a project' };
+const titles: Record<Kind, string> = {
+  status: 'Set the status',
+  tub: 'Set the place',
+  project: 'Add to a project',
+};
 
 /** What can be done with the ticked rows: place, status, project, export. */
 export function BulkActions({ ids, onDone }: { ids: string[]; onDone: () => void }) {
@@ -57,12 +61,30 @@ export function BulkActions({ ids, onDone }: { ids: string[]; onDone: () => void
       <Button size="sm" tone="plain" onClick={onDone}>
         Untick all
       </Button>
-      {kind ? <ChangeDialog key={kind} kind={kind} ids={ids as AnimalId[]} onClose={() => setKind(null)} onDone={onDone} /> : null}
+      {kind ? (
+        <ChangeDialog
+          key={kind}
+          kind={kind}
+          ids={ids as AnimalId[]}
+          onClose={() => setKind(null)}
+          onDone={onDone}
+        />
+      ) : null}
     </div>
   );
 }
 
-function ChangeDialog({ kind, ids, onClose, onDone }: { kind: Kind; ids: AnimalId[]; onClose: () => void; onDone: () => void }) {
+function ChangeDialog({
+  kind,
+  ids,
+  onClose,
+  onDone,
+}: {
+  kind: Kind;
+  ids: AnimalId[];
+  onClose: () => void;
+  onDone: () => void;
+}) {
   const workspace = useWorkspaceSlug();
   const { projects } = useWorkspace();
   const tubs = useTubs(kind === 'tub').data?.tubs ?? [];
@@ -72,7 +94,10 @@ function ChangeDialog({ kind, ids, onClose, onDone }: { kind: Kind; ids: AnimalI
     kind === 'status'
       ? animalStatus.options.map((status) => ({ value: status, label: statusWords[status] }))
       : kind === 'tub'
-        ? [{ value: 'none', label: 'No place' }, ...tubs.map(({ id, label, rack, room }) => ({ value: id, label: `${label} · ${rack}, ${room}` }))]
+        ? [
+            { value: 'none', label: 'No place' },
+            ...tubs.map(({ id, label, rack, room }) => ({ value: id, label: `${label} · ${rack}, ${room}` })),
+          ]
         : projects.map(({ id, name }) => ({ value: id, label: name }));
 
   const save = () => {
@@ -113,7 +138,12 @@ function ChangeDialog({ kind, ids, onClose, onDone }: { kind: Kind; ids: AnimalI
       <div className="flex flex-col gap-3">
         <FormErrorSummary message={change.error?.problem.detail} />
         <Field label={kind === 'status' ? 'Status' : kind === 'tub' ? 'Place' : 'Project'}>
-          <Select value={value} placeholder="Choose …" options={options} onChange={(event) => setValue(event.target.value)} />
+          <Select
+            value={value}
+            placeholder="Choose …"
+            options={options}
+            onChange={(event) => setValue(event.target.value)}
+          />
         </Field>
       </div>
     </Dialog>

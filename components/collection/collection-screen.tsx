@@ -67,18 +67,16 @@ export function CollectionScreen() {
   const isVirtual = rows.length > VIRTUAL_FROM;
   const { limit: _limit, ...exported } = listQueryOf(state);
   return (
-    <SplitView
-      panel={chosen ? <AnimalPanel key={chosen} id={chosen} onClose={() => open(null)} /> : null}
-      panelTitle={chosen ? <AnimalPanelTitle id={chosen} /> : null}
-      footer={chosen ? <AnimalPanelFooter id={chosen} /> : undefined}
-      onClose={() => open(null)}
-    >
+    <>
       <PageHeader
         title="Collection"
         meta={
           sexes ? (
             <span>
-              {total} {total === 1 ? 'animal' : 'animals'} · <span className="font-mono" title="Males, females, unknown">{saySexes(sexes)}</span>
+              {total} {total === 1 ? 'animal' : 'animals'} ·{' '}
+              <span className="font-mono" title="Males, females, unknown">
+                {saySexes(sexes)}
+              </span>
             </span>
           ) : null
         }
@@ -110,50 +108,66 @@ export function CollectionScreen() {
             </DropdownMenu>
           </>
         }
+      />
+      <SplitView
+        panel={chosen ? <AnimalPanel key={chosen} id={chosen} onClose={() => open(null)} /> : null}
+        panelTitle={chosen ? <AnimalPanelTitle id={chosen} /> : null}
+        footer={chosen ? <AnimalPanelFooter id={chosen} /> : undefined}
+        onClose={() => open(null)}
       >
-        <AnimalFilters state={state} onChange={(change) => void setState(change)} />
-      </PageHeader>
-      <PageBody>
-        {animals.isError && !animals.data ? (
-          <ErrorState onRetry={() => void animals.refetch()} retrying={animals.isFetching}>
-            {animals.error.problem?.detail}
-          </ErrorState>
-        ) : (
-          <DataTable
-            label="Animals"
-            columns={columns}
-            rows={rows}
-            rowId={(row) => row.id}
-            rowLabel={(row) => [row.code, row.name].filter(Boolean).join(' ')}
-            sort={sortFromText(state.sort)}
-            onSortChange={(sort) => void setState({ sort: animalSort.safeParse(sortToText(sort)).data ?? null })}
-            sortedByServer
-            selected={ticked}
-            onSelectedChange={setTicked}
-            activeId={chosen}
-            onRowOpen={(row) => open(row.id)}
-            virtual={isVirtual}
-            height={isVirtual ? 'calc(100dvh - 15rem)' : undefined}
-            loading={animals.isPending}
-            toolbar={
-              ticked.length > 0 ? (
-                <BulkActions ids={ticked} onDone={() => setTicked([])} />
-              ) : (
-                <span className="flex flex-wrap items-center gap-3 text-sm text-ink-3">
-                  <Button asChild size="sm" tone="plain">
-                    <a href={files.csv(exported)}>
-                      <Download aria-hidden /> Export these {total}
-                    </a>
-                  </Button>
-                  {total > rows.length ? `The first ${LIST_LIMIT} of ${total} are shown; narrow the list to see the others.` : null}
-                </span>
-              )
-            }
-            empty={ofAll === 0 ? <NoAnimals home={home} mayEdit={mayEdit} mayImport={mayImport} /> : <NoMatch onClear={isFiltered(state) ? () => void setState(null) : null} />}
-          />
-        )}
-      </PageBody>
-    </SplitView>
+        <PageBody>
+          <AnimalFilters state={state} onChange={(change) => void setState(change)} />
+          {animals.isError && !animals.data ? (
+            <ErrorState onRetry={() => void animals.refetch()} retrying={animals.isFetching}>
+              {animals.error.problem?.detail}
+            </ErrorState>
+          ) : (
+            <DataTable
+              label="Animals"
+              columns={columns}
+              rows={rows}
+              rowId={(row) => row.id}
+              rowLabel={(row) => [row.code, row.name].filter(Boolean).join(' ')}
+              sort={sortFromText(state.sort)}
+              onSortChange={(sort) =>
+                void setState({ sort: animalSort.safeParse(sortToText(sort)).data ?? null })
+              }
+              sortedByServer
+              selected={ticked}
+              onSelectedChange={setTicked}
+              activeId={chosen}
+              onRowOpen={(row) => open(row.id)}
+              virtual={isVirtual}
+              height={isVirtual ? 'calc(100dvh - 15rem)' : undefined}
+              loading={animals.isPending}
+              toolbar={
+                ticked.length > 0 ? (
+                  <BulkActions ids={ticked} onDone={() => setTicked([])} />
+                ) : (
+                  <span className="flex flex-wrap items-center gap-3 text-sm text-ink-3">
+                    <Button asChild size="sm" tone="plain">
+                      <a href={files.csv(exported)}>
+                        <Download aria-hidden /> Export these {total}
+                      </a>
+                    </Button>
+                    {total > rows.length
+                      ? `The first ${LIST_LIMIT} of ${total} are shown; narrow the list to see the others.`
+                      : null}
+                  </span>
+                )
+              }
+              empty={
+                ofAll === 0 ? (
+                  <NoAnimals home={home} mayEdit={mayEdit} mayImport={mayImport} />
+                ) : (
+                  <NoMatch onClear={isFiltered(state) ? () => void setState(null) : null} />
+                )
+              }
+            />
+          )}
+        </PageBody>
+      </SplitView>
+    </>
   );
 }
 
@@ -182,16 +196,20 @@ function NoAnimals({ home, mayEdit, mayImport }: { home: string; mayEdit: boolea
         </>
       }
     >
-      Every animal stands here with what it looks like, what it carries and who owns which part of it. Begin with the parents: their
-      young then follow from the clutches.
+      Every animal stands here with what it looks like, what it carries and who owns which part of it. Begin
+      with the parents: their young then follow from the clutches.
     </EmptyState>
   );
 }
 
 function NoMatch({ onClear }: { onClear: (() => void) | null }) {
   return (
-    <EmptyState title="No animal matches" action={onClear ? <Button onClick={onClear}>Clear filters</Button> : null}>
-      There are animals, but none is like this. Search looks into codes, names and what they look like and carry.
+    <EmptyState
+      title="No animal matches"
+      action={onClear ? <Button onClick={onClear}>Clear filters</Button> : null}
+    >
+      There are animals, but none is like this. Search looks into codes, names and what they look like and
+      carry.
     </EmptyState>
   );
 }

@@ -49,7 +49,9 @@ export function CombinationDialog({ species, onClose }: { species: SpeciesDetail
       }
     >
       <form id="combination" onSubmit={save} className="flex flex-col gap-4">
-        <FormErrorSummary message={create.error && !create.error.messageFor('name') ? create.error.problem.detail : undefined} />
+        <FormErrorSummary
+          message={create.error && !create.error.messageFor('name') ? create.error.problem.detail : undefined}
+        />
         <Field label="Name" error={create.error?.messageFor('name')}>
           <TextInput value={name} onChange={(event) => setName(event.target.value)} />
         </Field>

@@ -40,23 +40,40 @@ export function DocumentsSection({ animal }: { animal: AnimalRecord }) {
                 if (file) {
                   add.mutate(
                     { params: { workspace: slug, animal: animal.id }, body: { file } },
-                    { onSuccess: () => toast.success(`${file.name} is kept`), onError: (error) => toast.error(error.problem.detail) },
+                    {
+                      onSuccess: () => toast.success(`${file.name} is kept`),
+                      onError: (error) => toast.error(error.problem.detail),
+                    },
                   );
                 }
               }}
             />
-            <Button size="sm" tone="link" busy={add.isPending} icon={<FileUp aria-hidden />} onClick={() => chooser.current?.click()}>
+            <Button
+              size="sm"
+              tone="link"
+              busy={add.isPending}
+              icon={<FileUp aria-hidden />}
+              onClick={() => chooser.current?.click()}
+            >
               Add a paper
             </Button>
           </>
         ) : null}
       </div>
-      {animal.documents.length === 0 ? <p className="text-base text-ink-3">None. PDF, JPEG, PNG and plain text are taken, up to 10 MB.</p> : null}
+      {animal.documents.length === 0 ? (
+        <p className="text-base text-ink-3">None. PDF, JPEG, PNG and plain text are taken, up to 10 MB.</p>
+      ) : null}
       <ul>
         {animal.documents.map((document) => (
-          <li key={document.id} className="flex items-center gap-2 border-b border-rule-2 py-1 last:border-b-0">
+          <li
+            key={document.id}
+            className="flex items-center gap-2 border-b border-rule-2 py-1 last:border-b-0"
+          >
             <FileText aria-hidden className="size-4 shrink-0 text-ink-3" />
-            <a href={files.document(document.id)} className="min-w-0 flex-1 truncate text-slate underline underline-offset-2">
+            <a
+              href={files.document(document.id)}
+              className="min-w-0 flex-1 truncate text-slate underline underline-offset-2"
+            >
               {document.name}
             </a>
             <span className="text-sm whitespace-nowrap text-ink-3">
@@ -78,7 +95,10 @@ export function DocumentsSection({ animal }: { animal: AnimalRecord }) {
                 onConfirm={() =>
                   remove.mutate(
                     { params: { workspace: slug, document: document.id } },
-                    { onSuccess: () => setAsksFor(null), onError: (error) => toast.error(error.problem.detail) },
+                    {
+                      onSuccess: () => setAsksFor(null),
+                      onError: (error) => toast.error(error.problem.detail),
+                    },
                   )
                 }
               />

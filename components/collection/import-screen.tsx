@@ -64,7 +64,9 @@ export function ImportScreen() {
   };
 
   const setColumn = (index: number, field: ImportField | null) => {
-    const next = columns.map((one, at) => (at === index ? field : field !== null && one === field ? null : one));
+    const next = columns.map((one, at) =>
+      at === index ? field : field !== null && one === field ? null : one,
+    );
     setColumns(next);
     if (file && next.includes('code')) look(file, next);
   };
@@ -90,14 +92,22 @@ export function ImportScreen() {
         back={{ href: `/${slug}/collection`, label: 'Collection' }}
         actions={
           plan ? (
-            <Button tone="primary" busy={commit.isPending} disabled={plan.errors > 0 || preview.isPending || !columns.includes('code')} onClick={importAll}>
+            <Button
+              tone="primary"
+              busy={commit.isPending}
+              disabled={plan.errors > 0 || preview.isPending || !columns.includes('code')}
+              onClick={importAll}
+            >
               Import {plan.rows.length} {plan.rows.length === 1 ? 'animal' : 'animals'}
             </Button>
           ) : null
         }
       />
       <PageBody className="max-w-6xl">
-        <FormErrorSummary title={commit.error ? 'Nothing was imported' : 'The file could not be read so'} message={error?.problem.detail} />
+        <FormErrorSummary
+          title={commit.error ? 'Nothing was imported' : 'The file could not be read so'}
+          message={error?.problem.detail}
+        />
         <FileDrop
           label={file ? `${file.name}: choose another file` : 'Drop a CSV file here, or choose one'}
           hint="One row per animal, with a head. A file that was exported here fits as it is. Parents may stand in the same file, in any order."
@@ -108,17 +118,27 @@ export function ImportScreen() {
         />
         {plan ? (
           <>
-            <Panel title="Columns" aside="What each column of the file is. Columns that are left out are not read.">
+            <Panel
+              title="Columns"
+              aside="What each column of the file is. Columns that are left out are not read."
+            >
               <div className="grid gap-3 sm:grid-cols-2 lg:grid-cols-3">
                 {plan.head.map((head, index) => (
                   <label key={`${head}-${index}`} className="flex min-w-0 flex-col gap-1">
                     <span className="text-sm font-semibold break-words">{head || `Column ${index + 1}`}</span>
                     <Select
                       value={columns[index] ?? ''}
-                      onChange={(event) => setColumn(index, (event.target.value || null) as ImportField | null)}
-                      options={[{ value: '', label: 'leave out' }, ...importFields.map((field) => ({ value: field, label: field }))]}
+                      onChange={(event) =>
+                        setColumn(index, (event.target.value || null) as ImportField | null)
+                      }
+                      options={[
+                        { value: '', label: 'leave out' },
+                        ...importFields.map((field) => ({ value: field, label: field })),
+                      ]}
                     />
-                    <span className="truncate text-sm text-ink-3">{plan.samples[index]?.join(' · ') || 'empty'}</span>
+                    <span className="truncate text-sm text-ink-3">
+                      {plan.samples[index]?.join(' · ') || 'empty'}
+                    </span>
                   </label>
                 ))}
               </div>
@@ -139,7 +159,8 @@ function PreviewRows({ plan }: { plan: ImportPreview }) {
     <Panel title="Rows" aside={`${plan.rows.length} rows, ${wrong.length} with something to put right`}>
       {wrong.length ? (
         <Notice tone="straw" className="mb-3">
-          Put the rows right in the file and choose it again. Nothing is imported until every row fits: all of it, or nothing.
+          Put the rows right in the file and choose it again. Nothing is imported until every row fits: all of
+          it, or nothing.
         </Notice>
       ) : (
         <Notice tone="moss" className="mb-3">
@@ -184,7 +205,11 @@ function PreviewRows({ plan }: { plan: ImportPreview }) {
           },
         ]}
       />
-      {shows.length > FIRST_ROWS ? <p className="mt-2 text-sm text-ink-3">The first {FIRST_ROWS} of {shows.length} rows; all of them were checked.</p> : null}
+      {shows.length > FIRST_ROWS ? (
+        <p className="mt-2 text-sm text-ink-3">
+          The first {FIRST_ROWS} of {shows.length} rows; all of them were checked.
+        </p>
+      ) : null}
     </Panel>
   );
 }

@@ -14,7 +14,13 @@ function Line({ double = false, dashed = false }: { double?: boolean; dashed?: b
   return (
     <svg aria-hidden viewBox="0 0 24 12" className="h-3 w-6 text-ink">
       {(double ? [4, 8] : [6]).map((y) => (
-        <path key={y} d={`M0 ${y}H24`} stroke="currentColor" strokeWidth="1.4" strokeDasharray={dashed ? '3 2.5' : undefined} />
+        <path
+          key={y}
+          d={`M0 ${y}H24`}
+          stroke="currentColor"
+          strokeWidth="1.4"
+          strokeDasharray={dashed ? '3 2.5' : undefined}
+        />
       ))}
     </svg>
   );

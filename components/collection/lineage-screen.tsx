@@ -24,10 +24,13 @@ import { LineageLegend } from './lineage-legend';
 import { LineageTable } from './lineage-table';
 import { sexWords } from './words';
 
-const LineageGraph = dynamic(() => import('@/components/drawings/lineage-graph').then((module) => module.LineageGraph), {
-  ssr: false,
-  loading: () => <Skeleton className="h-full w-full rounded-xl" />,
-});
+const LineageGraph = dynamic(
+  () => import('@/components/drawings/lineage-graph').then((module) => module.LineageGraph),
+  {
+    ssr: false,
+    loading: () => <Skeleton className="h-full w-full rounded-xl" />,
+  },
+);
 
 const params = {
   animal: parseAsString.withDefault(''),
@@ -38,7 +41,10 @@ const params = {
   view: parseAsStringLiteral(['graph', 'table'] as const).withDefault('graph'),
 };
 
-const generations = [0, 1, 2, 3, 4, 6, 10].map((number) => ({ value: String(number), label: number === 10 ? 'all' : String(number) }));
+const generations = [0, 1, 2, 3, 4, 6, 10].map((number) => ({
+  value: String(number),
+  label: number === 10 ? 'all' : String(number),
+}));
 
 /** Who descends from whom: a graph in the standard symbols, and a table that says the same. */
 export function LineageScreen() {
@@ -69,7 +75,10 @@ export function LineageScreen() {
       <PageHeader
         title={root ? `Lineage of ${root.code}` : 'Lineage'}
         meta={data ? `${data.nodes.length} animals` : null}
-        back={{ href: state.animal ? `/${slug}/collection/${state.animal}` : `/${slug}/collection`, label: root?.code ?? 'Collection' }}
+        back={{
+          href: state.animal ? `/${slug}/collection/${state.animal}` : `/${slug}/collection`,
+          label: root?.code ?? 'Collection',
+        }}
         actions={
           <Segmented
             label="Show as"
@@ -81,7 +90,8 @@ export function LineageScreen() {
             ]}
           />
         }
-      >
+      />
+      <PageBody>
         <div className="flex flex-wrap items-center gap-2" role="group" aria-label="What to show">
           <LineageChoice
             animal={state.animal}
@@ -106,8 +116,16 @@ export function LineageScreen() {
           ) : null}
           {state.animal ? (
             <>
-              <GenerationSelect label="Generations up" value={state.up} onChange={(up) => void setState({ up })} />
-              <GenerationSelect label="Generations down" value={state.down} onChange={(down) => void setState({ down })} />
+              <GenerationSelect
+                label="Generations up"
+                value={state.up}
+                onChange={(up) => void setState({ up })}
+              />
+              <GenerationSelect
+                label="Generations down"
+                value={state.down}
+                onChange={(down) => void setState({ down })}
+              />
             </>
           ) : null}
           {data?.loci.length ? (
@@ -126,16 +144,23 @@ export function LineageScreen() {
                 aria-label="Find in the graph"
                 placeholder="Find in the graph"
                 value={null}
-                options={data.nodes.filter(({ shown }) => shown).map(({ key, code, name, description }) => ({ value: key, label: code, hint: name, keywords: [description] }))}
+                options={data.nodes
+                  .filter(({ shown }) => shown)
+                  .map(({ key, code, name, description }) => ({
+                    value: key,
+                    label: code,
+                    hint: name,
+                    keywords: [description],
+                  }))}
                 onChange={(key) => setFocused(key)}
               />
             </div>
           ) : null}
         </div>
-      </PageHeader>
-      <PageBody>
         {!hasChoice ? (
-          <EmptyState title="Choose an animal">Its ancestors and descendants are drawn then. A whole species shows every animal that you may see.</EmptyState>
+          <EmptyState title="Choose an animal">
+            Its ancestors and descendants are drawn then. A whole species shows every animal that you may see.
+          </EmptyState>
         ) : lineage.isError && !data ? (
           <ErrorState onRetry={() => void lineage.refetch()} retrying={lineage.isFetching}>
             {lineage.error.problem?.detail}
@@ -146,7 +171,7 @@ export function LineageScreen() {
           <LineageTable lineage={data} focused={current} />
         ) : (
           <>
-            <div className="h-[calc(100dvh-19rem)] min-h-96">
+            <div className="h-[calc(100dvh-17.5rem)] min-h-96">
               <LineageGraph
                 animals={animals}
                 relatedMates={data.relatedMates}
@@ -158,7 +183,9 @@ export function LineageScreen() {
               />
             </div>
             <div className="flex flex-wrap items-center justify-between gap-3">
-              <p className="text-base">{current ? sayNode(data, current) : 'Choose an animal in the graph.'}</p>
+              <p className="text-base">
+                {current ? sayNode(data, current) : 'Choose an animal in the graph.'}
+              </p>
               {current && nodes.get(current)?.shown ? (
                 <div className="flex gap-2">
                   {current !== data.root ? (
@@ -180,11 +207,24 @@ export function LineageScreen() {
   );
 }
 
-function GenerationSelect({ label, value, onChange }: { label: string; value: number; onChange: (value: number) => void }) {
+function GenerationSelect({
+  label,
+  value,
+  onChange,
+}: {
+  label: string;
+  value: number;
+  onChange: (value: number) => void;
+}) {
   return (
     <label className="flex items-center gap-1.5 text-sm text-ink-2">
       {label}
-      <Select className="w-20" value={String(Math.min(value, 10))} onChange={(event) => onChange(Number(event.target.value))} options={generations} />
+      <Select
+        className="w-20"
+        value={String(Math.min(value, 10))}
+        onChange={(event) => onChange(Number(event.target.value))}
+        options={generations}
+      />
     </label>
   );
 }
@@ -196,13 +236,21 @@ function toAnimal(node: Lineage['nodes'][number]): LineageAnimal {
 
 /** One animal of the graph in words: what the symbol and its lines say. */
 export function sayNode(lineage: Lineage, key: string): string {
-  const codes = new Map(lineage.nodes.map((node) => [node.key, node.shown ? node.code : 'one that is not shown to you']));
+  const codes = new Map(
+    lineage.nodes.map((node) => [node.key, node.shown ? node.code : 'one that is not shown to you']),
+  );
   const node = lineage.nodes.find((one) => one.key === key);
   if (!node) return '';
   if (!node.shown) return 'An animal that is not shown to you.';
   const parents = [
-    node.sire ? `sire ${codes.get(node.sire)}` : node.possibleSires.length ? `sire one of ${node.possibleSires.map((sire) => codes.get(sire)).join(', ')}` : null,
+    node.sire
+      ? `sire ${codes.get(node.sire)}`
+      : node.possibleSires.length
+        ? `sire one of ${node.possibleSires.map((sire) => codes.get(sire)).join(', ')}`
+        : null,
     node.dam ? `dam ${codes.get(node.dam)}` : null,
   ].filter(Boolean);
-  return [node.code, sexWords[node.sex].toLowerCase(), node.description, node.fill?.words, ...parents].filter(Boolean).join(', ');
+  return [node.code, sexWords[node.sex].toLowerCase(), node.description, node.fill?.words, ...parents]
+    .filter(Boolean)
+    .join(', ');
 }

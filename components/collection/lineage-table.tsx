@@ -13,7 +13,8 @@ export function LineageTable({ lineage, focused }: { lineage: Lineage; focused: 
   const byKey = new Map(lineage.nodes.map((node) => [node.key, node]));
   const young = new Map<string, string[]>();
   for (const node of lineage.nodes) {
-    for (const parent of [node.sire, node.dam, ...node.possibleSires]) if (parent) young.set(parent, [...(young.get(parent) ?? []), node.key]);
+    for (const parent of [node.sire, node.dam, ...node.possibleSires])
+      if (parent) young.set(parent, [...(young.get(parent) ?? []), node.key]);
   }
   const related = new Set(lineage.relatedMates.map((pair) => pair.join(' ')));
   const name = (key: string) => {
@@ -45,7 +46,13 @@ export function LineageTable({ lineage, focused }: { lineage: Lineage; focused: 
           header: 'Animal',
           cell: (node) => (
             <span className="flex items-center gap-2 whitespace-nowrap">
-              <LineageSymbol sex={node.sex} shows={node.fill?.shows} carries={node.fill?.carries} dead={node.status === 'died'} hidden={!node.shown} />
+              <LineageSymbol
+                sex={node.sex}
+                shows={node.fill?.shows}
+                carries={node.fill?.carries}
+                dead={node.status === 'died'}
+                hidden={!node.shown}
+              />
               {name(node.key)}
               {node.key === focused ? <span className="text-sm text-ink-3">chosen</span> : null}
             </span>
@@ -53,13 +60,28 @@ export function LineageTable({ lineage, focused }: { lineage: Lineage; focused: 
         },
         { id: 'sex', header: 'Sex', cell: (node) => sexWords[node.sex] },
         { id: 'looks', header: 'Looks and carries', cell: (node) => node.description || '–' },
-        ...(lineage.nodes.some(({ fill }) => fill) ? [{ id: 'locus', header: 'At the locus', cell: (node: Lineage['nodes'][number]) => node.fill?.words ?? '–' }] : []),
-        { id: 'sire', header: 'Sire', cell: (node) => (node.sire ? name(node.sire) : list(node.possibleSires, ' or ')) },
+        ...(lineage.nodes.some(({ fill }) => fill)
+          ? [
+              {
+                id: 'locus',
+                header: 'At the locus',
+                cell: (node: Lineage['nodes'][number]) => node.fill?.words ?? '–',
+              },
+            ]
+          : []),
+        {
+          id: 'sire',
+          header: 'Sire',
+          cell: (node) => (node.sire ? name(node.sire) : list(node.possibleSires, ' or ')),
+        },
         { id: 'dam', header: 'Dam', cell: (node) => (node.dam ? name(node.dam) : '–') },
         {
           id: 'parents',
           header: 'Parents related',
-          cell: (node) => ([node.sire, ...node.possibleSires].some((sire) => related.has(`${sire} ${node.dam}`)) ? 'yes' : '–'),
+          cell: (node) =>
+            [node.sire, ...node.possibleSires].some((sire) => related.has(`${sire} ${node.dam}`))
+              ? 'yes'
+              : '–',
         },
         { id: 'young', header: 'Young', cell: (node) => list(young.get(node.key) ?? []) },
       ]}

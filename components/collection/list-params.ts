@@ -57,5 +57,13 @@ export function listQueryOf(state: ListState) {
 
 /** Whether anything narrows the list beyond what it starts with. */
 export function isFiltered(state: ListState): boolean {
-  return Boolean(state.q || state.species || state.sex || state.project || state.holder || state.locus || state.status !== 'present');
+  return Boolean(
+    state.q ||
+    state.species ||
+    state.sex ||
+    state.project ||
+    state.holder ||
+    state.locus ||
+    state.status !== 'present',
+  );
 }

@@ -9,7 +9,11 @@ import type { Sex } from '@/lib/contracts/animal';
 import type { LocusEntry } from '@/lib/contracts/locus';
 import type { LocusLine } from './animal-form-values';
 
-const bases = { stated: 'stated by somebody', tested: 'tested in a laboratory', proven: 'proven by its young' } as const;
+const bases = {
+  stated: 'stated by somebody',
+  tested: 'tested in a laboratory',
+  proven: 'proven by its young',
+} as const;
 
 /** What an animal looks like and carries, one line per locus. Loci without a line count as normal. */
 export function LociFields({
@@ -28,7 +32,8 @@ export function LociFields({
   const loci = useSpecies(speciesId).data?.loci ?? [];
   const used = new Set(lines.map(({ locusId }) => locusId));
   const free = loci.filter(({ id }) => !used.has(id));
-  const set = (index: number, change: Partial<LocusLine>) => onChange(lines.map((line, at) => (at === index ? { ...line, ...change } : line)));
+  const set = (index: number, change: Partial<LocusLine>) =>
+    onChange(lines.map((line, at) => (at === index ? { ...line, ...change } : line)));
   return (
     <div className="flex flex-col gap-3">
       {lines.map((line, index) => (
@@ -38,7 +43,9 @@ export function LociFields({
           locus={loci.find(({ id }) => id === line.locusId) ?? null}
           choices={loci.filter(({ id }) => id === line.locusId || !used.has(id))}
           sex={sex}
-          messages={['locusId', 'shows', 'carries'].map((part) => messageFor(`loci.${index}.${part}`)).filter((text) => text !== undefined)}
+          messages={['locusId', 'shows', 'carries']
+            .map((part) => messageFor(`loci.${index}.${part}`))
+            .filter((text) => text !== undefined)}
           onChange={(change) => set(index, change)}
           onRemove={() => onChange(lines.filter((_, at) => at !== index))}
         />
@@ -52,7 +59,11 @@ export function LociFields({
         >
           Add a locus
         </Button>
-        {loci.length === 0 && speciesId ? <p className="mt-1 text-sm text-ink-3">This species has no loci yet; add them under “Species and loci”.</p> : null}
+        {loci.length === 0 && speciesId ? (
+          <p className="mt-1 text-sm text-ink-3">
+            This species has no loci yet; add them under “Species and loci”.
+          </p>
+        ) : null}
       </div>
     </div>
   );
@@ -96,7 +107,9 @@ function LocusFields({
         <Select
           aria-label={`${name}: looks`}
           value={line.shows === null ? 'unjudged' : `is ${line.shows}`}
-          onChange={(event) => onChange({ shows: event.target.value === 'unjudged' ? null : event.target.value.slice(3) })}
+          onChange={(event) =>
+            onChange({ shows: event.target.value === 'unjudged' ? null : event.target.value.slice(3) })
+          }
           options={[
             { value: 'unjudged', label: 'looks: not judged' },
             { value: 'is ', label: 'looks normal' },
@@ -108,7 +121,11 @@ function LocusFields({
           value={current}
           onChange={(event) => {
             const preset = presets.find(({ key }) => key === event.target.value);
-            onChange({ carries: preset ? { genotypes: preset.genotypes, basis: line.carries?.basis ?? 'stated' } : null });
+            onChange({
+              carries: preset
+                ? { genotypes: preset.genotypes, basis: line.carries?.basis ?? 'stated' }
+                : null,
+            });
           }}
           options={[
             { value: '', label: 'carries: as it follows' },
@@ -123,7 +140,11 @@ function LocusFields({
           className="sm:max-w-xs"
           value={line.carries.basis}
           onChange={(event) =>
-            onChange({ carries: line.carries ? { ...line.carries, basis: event.target.value as keyof typeof bases } : null })
+            onChange({
+              carries: line.carries
+                ? { ...line.carries, basis: event.target.value as keyof typeof bases }
+                : null,
+            })
           }
           options={Object.entries(bases).map(([value, label]) => ({ value, label }))}
         />
@@ -144,9 +165,15 @@ const keyOf = (genotypes: Record<string, string>) =>
     .join(', ');
 
 /** Every certain genotype of the sex, and the usual chances of one copy that can't be seen. */
-function carriesPresets(locus: LocusEntry, sex: Sex): { key: string; label: string; genotypes: Record<string, string> }[] {
+function carriesPresets(
+  locus: LocusEntry,
+  sex: Sex,
+): { key: string; label: string; genotypes: Record<string, string> }[] {
   const genotypes = locus.genotypes[sex];
-  const certain = genotypes.map(({ genotype, words }) => ({ label: `${words} (${genotype})`, genotypes: { [genotype]: '1' } }));
+  const certain = genotypes.map(({ genotype, words }) => ({
+    label: `${words} (${genotype})`,
+    genotypes: { [genotype]: '1' },
+  }));
   const none = genotypes.find(({ copies }) => copies === 0);
   const hidden = genotypes.filter(({ copies, phenotype }) => copies === 1 && phenotype === '');
   const chances = [
@@ -157,7 +184,10 @@ function carriesPresets(locus: LocusEntry, sex: Sex): { key: string; label: stri
   ] as const;
   const possible = none
     ? hidden.flatMap(({ genotype, words }) =>
-        chances.map(([yes, no, percent]) => ({ label: `${percent} ${words}`, genotypes: { [genotype]: yes, [none.genotype]: no } })),
+        chances.map(([yes, no, percent]) => ({
+          label: `${percent} ${words}`,
+          genotypes: { [genotype]: yes, [none.genotype]: no },
+        })),
       )
     : [];
   return [...certain, ...possible].map((preset) => ({ ...preset, key: keyOf(preset.genotypes) }));

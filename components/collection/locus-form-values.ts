@@ -40,9 +40,17 @@ export function valuesOfLocus(locus: LocusEntry | null): LocusFormValues {
   }
   const { definition } = locus;
   const genotypes: LocusFormValues['genotypes'] = {};
-  for (const genotype of new Set([...Object.keys(definition.phenotypes), ...Object.keys(definition.penetrance), ...definition.lethal])) {
+  for (const genotype of new Set([
+    ...Object.keys(definition.phenotypes),
+    ...Object.keys(definition.penetrance),
+    ...definition.lethal,
+  ])) {
     const look = definition.phenotypes[genotype] ?? '';
-    genotypes[genotype] = { look, penetrance: definition.penetrance[genotype]?.[look] ?? '', lethal: definition.lethal.includes(genotype) };
+    genotypes[genotype] = {
+      look,
+      penetrance: definition.penetrance[genotype]?.[look] ?? '',
+      lethal: definition.lethal.includes(genotype),
+    };
   }
   return {
     name: locus.name,
@@ -60,7 +68,10 @@ export function valuesOfLocus(locus: LocusEntry | null): LocusFormValues {
 }
 
 /** Every genotype of the alleles as typed, but the wild type; single ones too where the locus is sex-linked. */
-export function genotypesOfValues({ alleles, chromosome }: Pick<LocusFormValues, 'alleles' | 'chromosome'>): string[] {
+export function genotypesOfValues({
+  alleles,
+  chromosome,
+}: Pick<LocusFormValues, 'alleles' | 'chromosome'>): string[] {
   const symbols = alleles.map(({ symbol }) => symbol.trim()).filter(Boolean);
   const pairs = symbols.flatMap((first, index) => symbols.slice(index).map((second) => `${first}/${second}`));
   const all = [...pairs, ...(chromosome === 'autosomal' ? [] : symbols)];
@@ -82,16 +93,25 @@ export function definitionOf(values: LocusFormValues): Definition {
     symbol: values.symbol || (values.alleles[1]?.symbol ?? ''),
     chromosome: values.chromosome,
     dominance: values.dominance,
-    linkage: values.linkageGroup ? { group: values.linkageGroup, position: Number(values.linkagePosition || Number.NaN) } : null,
+    linkage: values.linkageGroup
+      ? { group: values.linkageGroup, position: Number(values.linkagePosition || Number.NaN) }
+      : null,
     alleles: values.alleles,
     phenotypes: Object.fromEntries(shown.map(([genotype, { look }]) => [genotype, look.trim()])),
     penetrance: Object.fromEntries(
       shown
         .filter(([, { penetrance }]) => penetrance.trim() !== '' && penetrance.trim() !== '1')
-        .map(([genotype, { look, penetrance }]) => [genotype, { [look.trim()]: penetrance.trim(), '': rest(penetrance.trim()) }]),
+        .map(([genotype, { look, penetrance }]) => [
+          genotype,
+          { [look.trim()]: penetrance.trim(), '': rest(penetrance.trim()) },
+        ]),
     ),
     lethal: entries.filter(([, { lethal }]) => lethal).map(([genotype]) => genotype),
-    welfare: values.welfare.map(({ text, source, genotypes }) => ({ text, source, genotypes: genotypes.split(/[\s,]+/).filter(Boolean) })),
+    welfare: values.welfare.map(({ text, source, genotypes }) => ({
+      text,
+      source,
+      genotypes: genotypes.split(/[\s,]+/).filter(Boolean),
+    })),
     source: { citation: values.citation, certainty: values.certainty },
   };
 }

@@ -35,11 +35,20 @@ export function OwnersSection({ animal }: { animal: AnimalRecord }) {
             <div className="mb-1 flex flex-wrap items-baseline justify-between gap-x-3">
               <span className="font-semibold">{reasonWords[set.reason]}</span>
               <span className="text-sm text-ink-3">
-                {set.untilDay ? `${sayDay(set.fromDay)} – ${sayDay(set.untilDay)}` : `since ${sayDay(set.fromDay)}`}
+                {set.untilDay
+                  ? `${sayDay(set.fromDay)} – ${sayDay(set.untilDay)}`
+                  : `since ${sayDay(set.fromDay)}`}
               </span>
             </div>
-            <ShareStrip shares={shares(set.parts)} labels="parts" size="sm" label={`From ${sayDay(set.fromDay)}`} />
-            {set.price !== null ? <p className="mt-1 font-mono text-sm">{formatMoney(set.price, currency)}</p> : null}
+            <ShareStrip
+              shares={shares(set.parts)}
+              labels="parts"
+              size="sm"
+              label={`From ${sayDay(set.fromDay)}`}
+            />
+            {set.price !== null ? (
+              <p className="mt-1 font-mono text-sm">{formatMoney(set.price, currency)}</p>
+            ) : null}
             {set.note ? <p className="mt-1 text-sm text-ink-2">{set.note}</p> : null}
             {set.derivation?.length ? (
               <details className="mt-1 text-sm text-ink-2">
@@ -51,7 +60,9 @@ export function OwnersSection({ animal }: { animal: AnimalRecord }) {
                 </ol>
               </details>
             ) : null}
-            {set.recordedBy ? <p className="mt-0.5 text-sm text-ink-3">recorded by {set.recordedBy}</p> : null}
+            {set.recordedBy ? (
+              <p className="mt-0.5 text-sm text-ink-3">recorded by {set.recordedBy}</p>
+            ) : null}
           </li>
         ))}
       </ol>

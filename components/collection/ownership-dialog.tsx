@@ -28,13 +28,18 @@ export function OwnershipDialog({ animal, onClose }: { animal: AnimalRecord; onC
   // What the person saw when the form was opened; a later change by somebody else makes the save fail.
   const [seen, setSeen] = useState(() => animal.ownership.find((set) => set.untilDay === null) ?? null);
   const [lines, setLines] = useState<PartLine[]>(
-    () => seen?.parts.map(({ partyId, parts }) => ({ partyId, parts: String(parts) })) ?? [{ partyId: '', parts: '1' }],
+    () =>
+      seen?.parts.map(({ partyId, parts }) => ({ partyId, parts: String(parts) })) ?? [
+        { partyId: '', parts: '1' },
+      ],
   );
   const [reason, setReason] = useState<Reason>('transfer');
   const [fromDay, setFromDay] = useState(workspace.today);
   const [price, setPrice] = useState<number | null>(null);
   const [note, setNote] = useState('');
-  const parties = [...new Map([...animal.parties, ...workspace.parties].map((party) => [party.id, party])).values()];
+  const parties = [
+    ...new Map([...animal.parties, ...workspace.parties].map((party) => [party.id, party])).values(),
+  ];
   const isStale = record.error?.problem.type === '/problems/stale';
   const messageFor = (field: string) => record.error?.messageFor(field);
   const named = record.error?.problem.errors.length ?? 0;
@@ -98,13 +103,33 @@ export function OwnershipDialog({ animal, onClose }: { animal: AnimalRecord; onC
             />
           </Field>
           <Field label="From" error={messageFor('fromDay')}>
-            <DateInput value={fromDay} max={workspace.today} onChange={(event) => setFromDay(event.target.value)} />
+            <DateInput
+              value={fromDay}
+              max={workspace.today}
+              onChange={(event) => setFromDay(event.target.value)}
+            />
           </Field>
         </div>
-        <PartsFields field="parts" lines={lines} onChange={setLines} parties={parties} messageFor={messageFor} />
+        <PartsFields
+          field="parts"
+          lines={lines}
+          onChange={setLines}
+          parties={parties}
+          messageFor={messageFor}
+        />
         {reason === 'gift' ? null : (
-          <Field label="Price" optional hint="For the record only; nothing is posted to the ledger." error={messageFor('price')}>
-            <MoneyInput currency={workspace.currency} exponent={exponentOf(workspace.currency)} value={price} onChange={setPrice} />
+          <Field
+            label="Price"
+            optional
+            hint="For the record only; nothing is posted to the ledger."
+            error={messageFor('price')}
+          >
+            <MoneyInput
+              currency={workspace.currency}
+              exponent={exponentOf(workspace.currency)}
+              value={price}
+              onChange={setPrice}
+            />
           </Field>
         )}
         <Field label="Note" optional error={messageFor('note')}>

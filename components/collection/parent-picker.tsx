@@ -23,7 +23,12 @@ export function ParentPicker({
 }) {
   const [text, setText] = useState('');
   const search = useDeferredValue(text);
-  const found = useAnimals({ species: (speciesId || undefined) as SpeciesId | undefined, search: search || undefined, limit: 60, sort: 'code' });
+  const found = useAnimals({
+    species: (speciesId || undefined) as SpeciesId | undefined,
+    search: search || undefined,
+    limit: 60,
+    sort: 'code',
+  });
   const rows = (found.data?.rows ?? []).filter(({ sex }) => sex !== (as === 'sire' ? 'female' : 'male'));
   return (
     <Combobox
@@ -35,7 +40,11 @@ export function ParentPicker({
       loading={found.isFetching}
       onSearchChange={setText}
       emptyText={`No ${as === 'sire' ? 'male' : 'female'} of this species matches.`}
-      options={rows.map((row) => ({ value: row.id, label: `${sexSigns[row.sex]} ${row.code}`, hint: row.description }))}
+      options={rows.map((row) => ({
+        value: row.id,
+        label: `${sexSigns[row.sex]} ${row.code}`,
+        hint: row.description,
+      }))}
       onChange={(id) => {
         const row = rows.find((one) => one.id === id);
         onChange(id === null ? null : row ? { id, label: row.code } : value);

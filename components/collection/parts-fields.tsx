@@ -16,7 +16,12 @@ export interface PartLine {
 
 /** Lines of parts as they go over the wire; what is no whole number goes as 0 and is refused there. */
 export const partsOf = (lines: readonly PartLine[]) =>
-  lines.filter(({ partyId }) => partyId).map(({ partyId, parts }) => ({ partyId: partyId as PartyId, parts: /^\d+$/.test(parts.trim()) ? Number(parts) : 0 }));
+  lines
+    .filter(({ partyId }) => partyId)
+    .map(({ partyId, parts }) => ({
+      partyId: partyId as PartyId,
+      parts: /^\d+$/.test(parts.trim()) ? Number(parts) : 0,
+    }));
 
 /** Who holds how many parts, drawn while it is typed. */
 export function PartsFields({
@@ -34,11 +39,15 @@ export function PartsFields({
   field: string;
 }) {
   const shares = useShares(parties);
-  const set = (index: number, change: Partial<PartLine>) => onChange(lines.map((line, at) => (at === index ? { ...line, ...change } : line)));
+  const set = (index: number, change: Partial<PartLine>) =>
+    onChange(lines.map((line, at) => (at === index ? { ...line, ...change } : line)));
   const valid = partsOf(lines).filter(({ parts }) => parts > 0);
   const messages = [
     messageFor(field),
-    ...lines.flatMap((_, index) => [messageFor(`${field}.${index}.partyId`), messageFor(`${field}.${index}.parts`)]),
+    ...lines.flatMap((_, index) => [
+      messageFor(`${field}.${index}.partyId`),
+      messageFor(`${field}.${index}.parts`),
+    ]),
   ].filter(Boolean);
   return (
     <fieldset className="flex flex-col gap-2">
@@ -60,7 +69,11 @@ export function PartsFields({
             value={line.parts}
             onChange={(event) => set(index, { parts: event.target.value })}
           />
-          <IconButton label={`Remove owner ${index + 1}`} disabled={lines.length < 2} onClick={() => onChange(lines.filter((_, at) => at !== index))}>
+          <IconButton
+            label={`Remove owner ${index + 1}`}
+            disabled={lines.length < 2}
+            onClick={() => onChange(lines.filter((_, at) => at !== index))}
+          >
             <X aria-hidden />
           </IconButton>
         </div>
@@ -71,7 +84,11 @@ export function PartsFields({
         </p>
       ))}
       <div>
-        <Button size="sm" icon={<Plus aria-hidden />} onClick={() => onChange([...lines, { partyId: '', parts: '1' }])}>
+        <Button
+          size="sm"
+          icon={<Plus aria-hidden />}
+          onClick={() => onChange([...lines, { partyId: '', parts: '1' }])}
+        >
           Another owner
         </Button>
       </div>

@@ -45,7 +45,9 @@ export function PhotosSection({ animal }: { animal: AnimalRecord }) {
             className="max-h-72 w-full rounded-lg bg-track object-cover"
           />
           {photo.caption || photo.takenOn ? (
-            <figcaption className="mt-1 text-sm text-ink-3">{[photo.caption, photo.takenOn ? sayDay(photo.takenOn) : ''].filter(Boolean).join(' · ')}</figcaption>
+            <figcaption className="mt-1 text-sm text-ink-3">
+              {[photo.caption, photo.takenOn ? sayDay(photo.takenOn) : ''].filter(Boolean).join(' · ')}
+            </figcaption>
           ) : null}
         </figure>
       ) : null}
@@ -60,7 +62,14 @@ export function PhotosSection({ animal }: { animal: AnimalRecord }) {
                 onClick={() => setChosen(one.id)}
                 className="size-12 overflow-hidden rounded-md border-2 border-transparent aria-pressed:border-ember"
               >
-                <Image unoptimized src={files.photo(one.id, 'small')} width={96} height={96} alt="" className="size-full object-cover" />
+                <Image
+                  unoptimized
+                  src={files.photo(one.id, 'small')}
+                  width={96}
+                  height={96}
+                  alt=""
+                  className="size-full object-cover"
+                />
               </button>
             </li>
           ))}
@@ -82,7 +91,12 @@ export function PhotosSection({ animal }: { animal: AnimalRecord }) {
               });
             }}
           />
-          <Button size="sm" busy={add.isPending} icon={<ImagePlus aria-hidden />} onClick={() => chooser.current?.click()}>
+          <Button
+            size="sm"
+            busy={add.isPending}
+            icon={<ImagePlus aria-hidden />}
+            onClick={() => chooser.current?.click()}
+          >
             {animal.photos.length ? 'Add photos' : 'Add the first photo'}
           </Button>
           {photo ? (
@@ -93,7 +107,9 @@ export function PhotosSection({ animal }: { animal: AnimalRecord }) {
                   tone="plain"
                   busy={edit.isPending}
                   icon={<Star aria-hidden />}
-                  onClick={() => edit.mutate({ params: { workspace: slug, photo: photo.id }, body: { first: true } })}
+                  onClick={() =>
+                    edit.mutate({ params: { workspace: slug, photo: photo.id }, body: { first: true } })
+                  }
                 >
                   Show first
                 </Button>
@@ -113,7 +129,10 @@ export function PhotosSection({ animal }: { animal: AnimalRecord }) {
                 onConfirm={() =>
                   remove.mutate(
                     { params: { workspace: slug, photo: photo.id } },
-                    { onSuccess: () => setAsks(false), onError: (error) => toast.error(error.problem.detail) },
+                    {
+                      onSuccess: () => setAsks(false),
+                      onError: (error) => toast.error(error.problem.detail),
+                    },
                   )
                 }
               />

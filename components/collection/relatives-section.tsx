@@ -12,7 +12,10 @@ export function RelativeLink({ relative }: { relative: Relative }) {
   const { slug } = useWorkspace();
   if (!relative.shown) return <span className="text-ink-3 italic">not shown to you</span>;
   return (
-    <Link href={`/${slug}/collection/${relative.id}`} className="inline-flex min-w-0 flex-wrap items-center gap-x-2 hover:underline">
+    <Link
+      href={`/${slug}/collection/${relative.id}`}
+      className="inline-flex min-w-0 flex-wrap items-center gap-x-2 hover:underline"
+    >
       <AnimalCode code={relative.code} sex={relative.sex} size="sm" />
       <span className="text-sm text-ink-2">{relative.description}</span>
     </Link>
@@ -28,7 +31,13 @@ function Line({ label, children }: { label: string; children: ReactNode }) {
   );
 }
 
-const pairingWords: Record<string, string> = { draft: 'draft', proposed: 'proposed', agreed: 'agreed', withdrawn: 'withdrawn', ended: 'ended' };
+const pairingWords: Record<string, string> = {
+  draft: 'draft',
+  proposed: 'proposed',
+  agreed: 'agreed',
+  withdrawn: 'withdrawn',
+  ended: 'ended',
+};
 const FIRST_YOUNG = 6;
 
 /** Parents, young, pairings and clutches of an animal. */
@@ -49,7 +58,9 @@ export function RelativesSection({ animal }: { animal: AnimalRecord }) {
               {animal.possibleSires.map(({ sire, weight }, index) => (
                 <span key={sire.shown ? sire.id : index} className="flex items-center gap-2">
                   <RelativeLink relative={sire} />
-                  {animal.possibleSires.some((other) => other.weight !== weight) ? <span className="font-mono text-sm">×{weight}</span> : null}
+                  {animal.possibleSires.some((other) => other.weight !== weight) ? (
+                    <span className="font-mono text-sm">×{weight}</span>
+                  ) : null}
                 </span>
               ))}
             </>
@@ -57,10 +68,19 @@ export function RelativesSection({ animal }: { animal: AnimalRecord }) {
             <span className="text-ink-3">not known</span>
           )}
         </Line>
-        <Line label="Dam">{animal.dam ? <RelativeLink relative={animal.dam} /> : <span className="text-ink-3">not known</span>}</Line>
+        <Line label="Dam">
+          {animal.dam ? (
+            <RelativeLink relative={animal.dam} />
+          ) : (
+            <span className="text-ink-3">not known</span>
+          )}
+        </Line>
         {animal.hatchedFrom ? (
           <Line label="Clutch">
-            <Link href={`/${slug}/clutches/${animal.hatchedFrom.id}`} className="font-mono text-slate underline underline-offset-2">
+            <Link
+              href={`/${slug}/clutches/${animal.hatchedFrom.id}`}
+              className="font-mono text-slate underline underline-offset-2"
+            >
               {animal.hatchedFrom.code}
             </Link>
           </Line>
@@ -71,7 +91,10 @@ export function RelativesSection({ animal }: { animal: AnimalRecord }) {
               <RelativeLink key={one.shown ? one.id : index} relative={one} />
             ))}
             {more > 0 ? (
-              <Link href={`/${slug}/collection/lineage?animal=${animal.id}`} className="text-sm text-slate underline underline-offset-2">
+              <Link
+                href={`/${slug}/collection/lineage?animal=${animal.id}`}
+                className="text-sm text-slate underline underline-offset-2"
+              >
                 and {more} more, in the lineage
               </Link>
             ) : null}
@@ -81,7 +104,10 @@ export function RelativesSection({ animal }: { animal: AnimalRecord }) {
           <Line label="Pairings">
             {animal.pairings.map((pairing) => (
               <span key={pairing.id} className="flex flex-wrap items-center gap-x-2">
-                <Link href={`/${slug}/season/pairings/${pairing.id}`} className="text-slate underline underline-offset-2">
+                <Link
+                  href={`/${slug}/season/pairings/${pairing.id}`}
+                  className="text-slate underline underline-offset-2"
+                >
                   {pairing.season}, {pairingWords[pairing.status] ?? pairing.status}
                 </Link>
                 <span className="text-ink-3">with</span>
@@ -94,7 +120,10 @@ export function RelativesSection({ animal }: { animal: AnimalRecord }) {
           <Line label="Clutches">
             {animal.clutches.map((clutch) => (
               <span key={clutch.id}>
-                <Link href={`/${slug}/clutches/${clutch.id}`} className="font-mono text-slate underline underline-offset-2">
+                <Link
+                  href={`/${slug}/clutches/${clutch.id}`}
+                  className="font-mono text-slate underline underline-offset-2"
+                >
                   {clutch.code}
                 </Link>{' '}
                 <span className="text-sm text-ink-3">laid {sayDay(clutch.laidOn)}</span>

@@ -11,7 +11,9 @@ interface PartyMark {
 }
 
 /** Parts of parties as the strip draws them. `also` knows parties beyond those of the workspace's frame. */
-export function useShares(also: readonly PartyMark[] = []): (parts: readonly { partyId: PartyId; parts: number }[]) => Share[] {
+export function useShares(
+  also: readonly PartyMark[] = [],
+): (parts: readonly { partyId: PartyId; parts: number }[]) => Share[] {
   const parties = useParties();
   const others = new Map(also.map((party) => [party.id, party]));
   return (parts) =>

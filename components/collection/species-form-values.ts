@@ -21,7 +21,13 @@ export const speciesFigures = [
 ] as const;
 export type FigureName = (typeof speciesFigures)[number]['name'];
 
-type Values = { name: string; scientificName: string; codePrefix: string; sexSystem: SpeciesDetail['sexSystem']; source: string } & Record<FigureName, string>;
+type Values = {
+  name: string;
+  scientificName: string;
+  codePrefix: string;
+  sexSystem: SpeciesDetail['sexSystem'];
+  source: string;
+} & Record<FigureName, string>;
 
 /** Percent of a fraction in text, to at most one decimal. */
 function percentOf(fraction: string): string {
@@ -30,8 +36,12 @@ function percentOf(fraction: string): string {
 }
 
 export function valuesOfSpecies(species: SpeciesDetail | null): Values {
-  const blank = Object.fromEntries(speciesFigures.map(({ name }) => [name, ''])) as Record<FigureName, string>;
-  if (!species) return { name: '', scientificName: '', codePrefix: '', sexSystem: 'unknown', source: '', ...blank };
+  const blank = Object.fromEntries(speciesFigures.map(({ name }) => [name, ''])) as Record<
+    FigureName,
+    string
+  >;
+  if (!species)
+    return { name: '', scientificName: '', codePrefix: '', sexSystem: 'unknown', source: '', ...blank };
   const { profile } = species;
   const figures: Record<FigureName, number | string> = {
     clutchFrom: profile.clutchSize.from,
@@ -57,7 +67,10 @@ export function valuesOfSpecies(species: SpeciesDetail | null): Values {
     codePrefix: species.codePrefix,
     sexSystem: species.sexSystem,
     source: profile.clutchSize.source,
-    ...(Object.fromEntries(Object.entries(figures).map(([name, value]) => [name, String(value)])) as Record<FigureName, string>),
+    ...(Object.fromEntries(Object.entries(figures).map(([name, value]) => [name, String(value)])) as Record<
+      FigureName,
+      string
+    >),
   };
 }
 
@@ -67,7 +80,12 @@ export function profileOf(values: Values, before: SpeciesProfile | null): Specie
   const changed = before ? valuesOfSpecies({ profile: before } as SpeciesDetail) : null;
   // A source stands with figures that were not touched; what is typed anew has the source that is typed.
   const source = (names: readonly FigureName[], was: string | undefined) =>
-    changed && was !== undefined && names.every((name) => changed[name] === values[name]) && values.source === changed.source ? was : values.source;
+    changed &&
+    was !== undefined &&
+    names.every((name) => changed[name] === values[name]) &&
+    values.source === changed.source
+      ? was
+      : values.source;
   const span = (name: FigureName, was: SpeciesProfile['intervals']['incubation'] | undefined) => {
     const usual = number(name);
     if (was && was.usual === usual) return was;
@@ -75,7 +93,12 @@ export function profileOf(values: Values, before: SpeciesProfile | null): Specie
   };
   return {
     bearing: before?.bearing ?? 'eggs',
-    clutchSize: { from: number('clutchFrom'), usual: number('clutchUsual'), to: number('clutchTo'), source: source(['clutchFrom', 'clutchUsual', 'clutchTo'], before?.clutchSize.source) },
+    clutchSize: {
+      from: number('clutchFrom'),
+      usual: number('clutchUsual'),
+      to: number('clutchTo'),
+      source: source(['clutchFrom', 'clutchUsual', 'clutchTo'], before?.clutchSize.source),
+    },
     hatchRate:
       before && percentOf(before.hatchRate.fraction) === values.hatchPercent
         ? before.hatchRate
@@ -88,11 +111,23 @@ export function profileOf(values: Values, before: SpeciesProfile | null): Specie
         from: number('incubationFrom'),
         usual: number('incubationUsual'),
         to: number('incubationTo'),
-        source: source(['incubationFrom', 'incubationUsual', 'incubationTo'], before?.intervals.incubation.source),
+        source: source(
+          ['incubationFrom', 'incubationUsual', 'incubationTo'],
+          before?.intervals.incubation.source,
+        ),
       },
-      hatchToFirstShed: before?.intervals.hatchToFirstShed ?? { from: 7, usual: 10, to: 21, source: 'common practice' },
+      hatchToFirstShed: before?.intervals.hatchToFirstShed ?? {
+        from: 7,
+        usual: 10,
+        to: 21,
+        source: 'common practice',
+      },
     },
-    incubationCelsius: { from: number('celsiusFrom'), to: number('celsiusTo'), source: source(['celsiusFrom', 'celsiusTo'], before?.incubationCelsius.source) },
+    incubationCelsius: {
+      from: number('celsiusFrom'),
+      to: number('celsiusTo'),
+      source: source(['celsiusFrom', 'celsiusTo'], before?.incubationCelsius.source),
+    },
     breeding: {
       femaleGrams: number('femaleGrams'),
       maleGrams: number('maleGrams'),

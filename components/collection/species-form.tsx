@@ -13,10 +13,23 @@ import { useWorkspace } from '@/lib/client/workspace';
 import { createSpecies, sexSystem, type SpeciesDetail } from '@/lib/contracts/species-catalogue';
 import { profileOf, speciesFigures, valuesOfSpecies, type FigureName } from './species-form-values';
 
-const systems = { XY: 'XY (males XY)', ZW: 'ZW (females ZW)', TSD: 'by temperature', unknown: 'not known' } as const;
+const systems = {
+  XY: 'XY (males XY)',
+  ZW: 'ZW (females ZW)',
+  TSD: 'by temperature',
+  unknown: 'not known',
+} as const;
 
 /** A species: its names, how its sex is decided, and what is usual for it, each with its source. */
-export function SpeciesForm({ species, onClose, onCreated }: { species: SpeciesDetail | null; onClose: () => void; onCreated?: (id: string) => void }) {
+export function SpeciesForm({
+  species,
+  onClose,
+  onCreated,
+}: {
+  species: SpeciesDetail | null;
+  onClose: () => void;
+  onCreated?: (id: string) => void;
+}) {
   const { slug } = useWorkspace();
   const create = useCreateSpecies();
   const edit = useEditSpecies();
@@ -34,16 +47,31 @@ export function SpeciesForm({ species, onClose, onCreated }: { species: SpeciesD
     event.preventDefault();
     if (saving.isPending) return;
     const { name, scientificName, codePrefix } = values;
-    const body = { name, scientificName, codePrefix, sexSystem: values.sexSystem, profile: profileOf(values, species?.profile ?? null) };
+    const body = {
+      name,
+      scientificName,
+      codePrefix,
+      sexSystem: values.sexSystem,
+      profile: profileOf(values, species?.profile ?? null),
+    };
     const issues = createSpecies.body.safeParse(body).error?.issues ?? [];
-    setLocal(issues.map(({ path, message }) => ({ field: path.join('.'), message: path[0] === 'profile' ? `${path.slice(1).join(' ')}: ${message}` : message })));
+    setLocal(
+      issues.map(({ path, message }) => ({
+        field: path.join('.'),
+        message: path[0] === 'profile' ? `${path.slice(1).join(' ')}: ${message}` : message,
+      })),
+    );
     if (issues.length) return;
     const done = (id?: string) => {
       toast.success(`${name} saved`);
       if (id) onCreated?.(id);
       onClose();
     };
-    if (species) edit.mutate({ params: { workspace: slug, species: species.id }, body: { ...body, version: species.version } }, { onSuccess: () => done() });
+    if (species)
+      edit.mutate(
+        { params: { workspace: slug, species: species.id }, body: { ...body, version: species.version } },
+        { onSuccess: () => done() },
+      );
     else create.mutate({ params: { workspace: slug }, body }, { onSuccess: ({ id }) => done(id) });
   };
 
@@ -63,7 +91,10 @@ export function SpeciesForm({ species, onClose, onCreated }: { species: SpeciesD
       }
     >
       <form id="species" onSubmit={save} className="flex flex-col gap-5" noValidate>
-        <FormErrorSummary message={errors.length ? undefined : saving.error?.problem.detail} errors={errors.map(({ message }) => ({ message }))} />
+        <FormErrorSummary
+          message={errors.length ? undefined : saving.error?.problem.detail}
+          errors={errors.map(({ message }) => ({ message }))}
+        />
         <div className="grid gap-4 sm:grid-cols-2">
           <Field label="Name" error={messageFor('name')}>
             <TextInput {...text('name')} />
@@ -74,7 +105,9 @@ export function SpeciesForm({ species, onClose, onCreated }: { species: SpeciesD
           <Field label="Sex is decided" error={messageFor('sexSystem')}>
             <Select
               value={values.sexSystem}
-              onChange={(event) => setValues({ ...values, sexSystem: sexSystem.catch('unknown').parse(event.target.value) })}
+              onChange={(event) =>
+                setValues({ ...values, sexSystem: sexSystem.catch('unknown').parse(event.target.value) })
+              }
               options={sexSystem.options.map((value) => ({ value, label: systems[value] }))}
             />
           </Field>
@@ -84,7 +117,9 @@ export function SpeciesForm({ species, onClose, onCreated }: { species: SpeciesD
         </div>
         <fieldset>
           <legend className="mb-1 text-lg">What is usual</legend>
-          <p className="mb-3 text-sm text-ink-3">Forecasts start from these figures; what is logged here replaces them.</p>
+          <p className="mb-3 text-sm text-ink-3">
+            Forecasts start from these figures; what is logged here replaces them.
+          </p>
           <div className="grid grid-cols-2 gap-3 sm:grid-cols-3">
             {speciesFigures.map(({ name, label, unit }) => (
               <Field key={name} label={label}>

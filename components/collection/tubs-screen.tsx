@@ -40,7 +40,9 @@ export function TubsScreen() {
       <PageHeader
         title="Tubs"
         back={{ href: `/${slug}/collection`, label: 'Collection' }}
-        meta={query.data ? `${tubs.length} in ${racks.length} ${racks.length === 1 ? 'rack' : 'racks'}` : null}
+        meta={
+          query.data ? `${tubs.length} in ${racks.length} ${racks.length === 1 ? 'rack' : 'racks'}` : null
+        }
         actions={
           mayEdit ? (
             <Button tone="primary" onClick={() => setAdds(true)}>
@@ -51,10 +53,16 @@ export function TubsScreen() {
       />
       <PageBody className="max-w-5xl">
         {query.isPending ? <Skeleton className="h-64 w-full" /> : null}
-        {query.isError ? <ErrorState onRetry={() => void query.refetch()}>{query.error.problem?.detail}</ErrorState> : null}
+        {query.isError ? (
+          <ErrorState onRetry={() => void query.refetch()}>{query.error.problem?.detail}</ErrorState>
+        ) : null}
         {query.data && tubs.length === 0 ? (
-          <EmptyState title="No tubs yet" action={mayEdit ? <Button onClick={() => setAdds(true)}>Add the first tub</Button> : null}>
-            A tub is a place in a rack with a label. Animals get one in their record, or many at once from the list.
+          <EmptyState
+            title="No tubs yet"
+            action={mayEdit ? <Button onClick={() => setAdds(true)}>Add the first tub</Button> : null}
+          >
+            A tub is a place in a rack with a label. Animals get one in their record, or many at once from the
+            list.
           </EmptyState>
         ) : null}
         {racks.map((rack) => (
@@ -65,7 +73,12 @@ export function TubsScreen() {
               rowKey={(tub) => tub.id}
               columns={[
                 { id: 'label', header: 'Tub', mono: true, cell: (tub) => tub.label },
-                { id: 'place', header: 'Row, column', mono: true, cell: (tub) => `${tub.rowNumber}, ${tub.columnNumber}` },
+                {
+                  id: 'place',
+                  header: 'Row, column',
+                  mono: true,
+                  cell: (tub) => `${tub.rowNumber}, ${tub.columnNumber}`,
+                },
                 { id: 'purpose', header: 'For', cell: (tub) => purposes[tub.purpose] },
                 { id: 'animals', header: 'Animals', align: 'end', cell: (tub) => tub.animals || '–' },
               ]}
@@ -78,7 +91,13 @@ export function TubsScreen() {
   );
 }
 
-function TubDialog({ start, onClose }: { start?: { room: string; rack: string; rowNumber: number; columnNumber: number }; onClose: () => void }) {
+function TubDialog({
+  start,
+  onClose,
+}: {
+  start?: { room: string; rack: string; rowNumber: number; columnNumber: number };
+  onClose: () => void;
+}) {
   const { slug } = useWorkspace();
   const create = useCreateTub();
   const [values, setValues] = useState({
@@ -144,7 +163,10 @@ function TubDialog({ start, onClose }: { start?: { room: string; rack: string; r
           <TextInput mono autoFocus {...field('label')} />
         </Field>
         <Field label="For" error={wrong('purpose')}>
-          <Select {...field('purpose')} options={tubPurpose.options.map((value) => ({ value, label: purposes[value] }))} />
+          <Select
+            {...field('purpose')}
+            options={tubPurpose.options.map((value) => ({ value, label: purposes[value] }))}
+          />
         </Field>
         <Field label="Row" error={wrong('rowNumber')}>
           <TextInput mono inputMode="numeric" {...field('rowNumber')} />

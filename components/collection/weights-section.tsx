@@ -33,7 +33,10 @@ export function WeightsSection({ animal }: { animal: AnimalRecord }) {
     event.preventDefault();
     if (add.isPending) return;
     add.mutate(
-      { params: { workspace: slug, animal: animal.id }, body: { weighedOn: day, grams: grams.trim() === '' ? 0 : Number(grams) } },
+      {
+        params: { workspace: slug, animal: animal.id },
+        body: { weighedOn: day, grams: grams.trim() === '' ? 0 : Number(grams) },
+      },
       {
         onSuccess: () => {
           setGrams('');
@@ -58,13 +61,22 @@ export function WeightsSection({ animal }: { animal: AnimalRecord }) {
       {animal.weights.length > 1 ? <WeightLine weights={animal.weights} /> : null}
       {adds ? (
         <form onSubmit={save} className="mb-2 flex flex-col gap-2">
-          {add.error && !wrong('weighedOn') && !wrong('grams') ? <FormErrorSummary message={add.error.problem.detail} /> : null}
+          {add.error && !wrong('weighedOn') && !wrong('grams') ? (
+            <FormErrorSummary message={add.error.problem.detail} />
+          ) : null}
           <div className="grid grid-cols-2 gap-2">
             <Field label="Weighed on" error={wrong('weighedOn')}>
               <DateInput value={day} max={today} onChange={(event) => setDay(event.target.value)} />
             </Field>
             <Field label="Weight" error={wrong('grams')}>
-              <TextInput mono inputMode="numeric" suffix="g" value={grams} onChange={(event) => setGrams(event.target.value)} autoFocus />
+              <TextInput
+                mono
+                inputMode="numeric"
+                suffix="g"
+                value={grams}
+                onChange={(event) => setGrams(event.target.value)}
+                autoFocus
+              />
             </Field>
           </div>
           <div className="flex gap-2">
@@ -80,7 +92,10 @@ export function WeightsSection({ animal }: { animal: AnimalRecord }) {
       {animal.weights.length === 0 ? <p className="text-base text-ink-3">None recorded.</p> : null}
       <ul>
         {shown.map((weight) => (
-          <li key={weight.id} className="flex items-center justify-between gap-3 border-b border-rule-2 py-1 last:border-b-0">
+          <li
+            key={weight.id}
+            className="flex items-center justify-between gap-3 border-b border-rule-2 py-1 last:border-b-0"
+          >
             <span className="text-ink-2">{sayDay(weight.weighedOn)}</span>
             <span className="flex items-center gap-1 font-mono">
               {sayGrams(weight.grams)}
@@ -114,7 +129,9 @@ export function WeightsSection({ animal }: { animal: AnimalRecord }) {
 
 /** The course of the weights; the list beside it says the same in figures. */
 function WeightLine({ weights }: { weights: AnimalRecord['weights'] }) {
-  const points = [...weights].reverse().map(({ weighedOn, grams }) => ({ day: Date.parse(weighedOn), grams }));
+  const points = [...weights]
+    .reverse()
+    .map(({ weighedOn, grams }) => ({ day: Date.parse(weighedOn), grams }));
   const days = points.map(({ day }) => day);
   const most = Math.max(...points.map(({ grams }) => grams));
   const [first, last] = [Math.min(...days), Math.max(...days)];
@@ -122,7 +139,13 @@ function WeightLine({ weights }: { weights: AnimalRecord['weights'] }) {
     `${(last === first ? 0.5 : (day - first) / (last - first)) * 100},${30 - (grams / most) * 27}`;
   return (
     <svg aria-hidden viewBox="-2 0 104 32" preserveAspectRatio="none" className="mb-1 h-12 w-full">
-      <polyline points={points.map(place).join(' ')} fill="none" stroke="var(--slate)" strokeWidth="2" vectorEffect="non-scaling-stroke" />
+      <polyline
+        points={points.map(place).join(' ')}
+        fill="none"
+        stroke="var(--slate)"
+        strokeWidth="2"
+        vectorEffect="non-scaling-stroke"
+      />
     </svg>
   );
 }

@@ -31,7 +31,13 @@ export const originWords: Record<AnimalOrigin, string> = {
   unknown: 'Origin unknown',
 };
 
-export const sexedByWords = { probed: 'probed', popped: 'popped', visible: 'visible', stated: 'stated', proven: 'proven' } as const;
+export const sexedByWords = {
+  probed: 'probed',
+  popped: 'popped',
+  visible: 'visible',
+  stated: 'stated',
+  proven: 'proven',
+} as const;
 
 export const reasonWords: Record<OwnershipReason, string> = {
   founding: 'First owners',
@@ -70,7 +76,9 @@ export const sayGrams = (grams: number) => `${grams.toLocaleString('en-US')} g`;
 
 /** "34 kB". */
 export function sayBytes(bytes: number): string {
-  return bytes < 1_000_000 ? `${Math.max(1, Math.round(bytes / 1000))} kB` : `${(bytes / 1_000_000).toFixed(1)} MB`;
+  return bytes < 1_000_000
+    ? `${Math.max(1, Math.round(bytes / 1000))} kB`
+    : `${(bytes / 1_000_000).toFixed(1)} MB`;
 }
 
 /** Males.females.unknown, as animals are counted in the trade. */

@@ -23,9 +23,15 @@ export interface Mating {
 }
 
 /** The matings of a set of animals: one for each pair (or lone parent) with young in the set. */
-export function matingsOf(animals: readonly LineageAnimal[], relatedMates: readonly (readonly [string, string])[]): Mating[] {
+export function matingsOf(
+  animals: readonly LineageAnimal[],
+  relatedMates: readonly (readonly [string, string])[],
+): Mating[] {
   const related = new Set(relatedMates.map(([sire, dam]) => `${sire} ${dam}`));
-  const found = new Map<string, { id: string; sires: readonly string[]; dam: string | null; young: string[]; related: boolean }>();
+  const found = new Map<
+    string,
+    { id: string; sires: readonly string[]; dam: string | null; young: string[]; related: boolean }
+  >();
   for (const animal of animals) {
     const sires = animal.sire ? [animal.sire] : animal.possibleSires;
     if (sires.length === 0 && !animal.dam) continue;
@@ -54,7 +60,10 @@ export interface Point {
  * @param animals places of the animals
  * @returns places of matings that move
  */
-export function placeMatings(matings: readonly Mating[], animals: ReadonlyMap<string, Point>): Map<string, Point> {
+export function placeMatings(
+  matings: readonly Mating[],
+  animals: ReadonlyMap<string, Point>,
+): Map<string, Point> {
   const rows = new Map<number, number[]>();
   for (const { x, y } of animals.values()) rows.set(Math.round(y), [...(rows.get(Math.round(y)) ?? []), x]);
   const moved = new Map<string, Point>();
@@ -80,13 +89,20 @@ export function neighbourOf(
   const animal = animals.get(key);
   const here = places.get(key);
   if (!animal || !here) return null;
-  if (direction === 'up') return [animal.sire, animal.dam, ...animal.possibleSires].find((parent) => parent && animals.has(parent)) ?? null;
-  if (direction === 'down') return matings.find(({ sires, dam }) => sires.includes(key) || dam === key)?.young[0] ?? null;
+  if (direction === 'up')
+    return (
+      [animal.sire, animal.dam, ...animal.possibleSires].find((parent) => parent && animals.has(parent)) ??
+      null
+    );
+  if (direction === 'down')
+    return matings.find(({ sires, dam }) => sires.includes(key) || dam === key)?.young[0] ?? null;
   const isAhead = (x: number) => (direction === 'left' ? x < here.x - 1 : x > here.x + 1);
   const mates = new Set(
     matings.flatMap(({ sires, dam }) => (dam === key ? [...sires] : sires.includes(key) && dam ? [dam] : [])),
   );
-  const ahead = [...places].filter(([other, { x, y }]) => animals.has(other) && isAhead(x) && (mates.has(other) || Math.abs(y - here.y) < 1));
+  const ahead = [...places].filter(
+    ([other, { x, y }]) => animals.has(other) && isAhead(x) && (mates.has(other) || Math.abs(y - here.y) < 1),
+  );
   const distance = ([, { x, y }]: [string, Point]) => Math.abs(x - here.x) + Math.abs(y - here.y);
   return ahead.sort((a, b) => distance(a) - distance(b))[0]?.[0] ?? null;
 }

@@ -5,7 +5,14 @@ import { Maximize, ZoomIn, ZoomOut } from 'lucide-react';
 import { useEffect, useMemo, useRef, useState, type KeyboardEvent } from 'react';
 import { IconButton } from '@/components/ui/icon-button';
 import { Spinner } from '@/components/ui/spinner';
-import { matingsOf, neighbourOf, placeMatings, type LineageAnimal, type Mating, type Point } from './lineage-elements';
+import {
+  matingsOf,
+  neighbourOf,
+  placeMatings,
+  type LineageAnimal,
+  type Mating,
+  type Point,
+} from './lineage-elements';
 import { looksOf, readColours, styleOf, type NodeData } from './lineage-style';
 
 export interface LineageGraphProps {
@@ -26,7 +33,15 @@ const arrows = { ArrowUp: 'up', ArrowDown: 'down', ArrowLeft: 'left', ArrowRight
  * A pedigree in the standard symbols: square male, circle female, diamond unknown; filled shows the locus, a dot carries
  * it, part-filled may carry it; a double line mates relatives; a slash has died.
  */
-export function LineageGraph({ animals, relatedMates, root, focused, onFocus, onOpen, describe }: LineageGraphProps) {
+export function LineageGraph({
+  animals,
+  relatedMates,
+  root,
+  focused,
+  onFocus,
+  onOpen,
+  describe,
+}: LineageGraphProps) {
   const box = useRef<HTMLDivElement>(null);
   const graph = useRef<Core | null>(null);
   const [ready, setReady] = useState(false);
@@ -37,7 +52,9 @@ export function LineageGraph({ animals, relatedMates, root, focused, onFocus, on
     callbacks.current = { onFocus, onOpen };
   });
   // What stands where depends on who is related to whom only; a change of the colours does not move anybody.
-  const structure = matings.map(({ id, young, related }) => `${id}:${young.join()}:${related}`).join(';') + animals.map(({ key }) => key).join();
+  const structure =
+    matings.map(({ id, young, related }) => `${id}:${young.join()}:${related}`).join(';') +
+    animals.map(({ key }) => key).join();
   const shown = useRef({ animals, matings, root });
   useEffect(() => {
     shown.current = { animals, matings, root };
@@ -47,7 +64,10 @@ export function LineageGraph({ animals, relatedMates, root, focused, onFocus, on
     let cancelled = false;
     setReady(false);
     const draw = async () => {
-      const [{ default: cytoscape }, { default: dagre }] = await Promise.all([import('cytoscape'), import('cytoscape-dagre')]);
+      const [{ default: cytoscape }, { default: dagre }] = await Promise.all([
+        import('cytoscape'),
+        import('cytoscape-dagre'),
+      ]);
       const container = box.current;
       if (cancelled || !container) return;
       registerDagre(cytoscape, dagre);
@@ -57,7 +77,6 @@ export function LineageGraph({ animals, relatedMates, root, focused, onFocus, on
         style: styleOf(readColours(container)),
         minZoom: 0.04,
         maxZoom: 3,
-        wheelSensitivity: 0.3,
         autoungrabify: true,
         boxSelectionEnabled: false,
         // Thousands of lines are moved as a picture and drawn anew when the hand rests.
@@ -112,7 +131,8 @@ export function LineageGraph({ animals, relatedMates, root, focused, onFocus, on
     node.addClass('focused');
     const seen = cy.extent();
     const at = node.nonempty() ? node.position() : null;
-    if (at && (at.x < seen.x1 + 20 || at.x > seen.x2 - 20 || at.y < seen.y1 + 20 || at.y > seen.y2 - 20)) cy.animate({ center: { eles: node } }, { duration: 160 });
+    if (at && (at.x < seen.x1 + 20 || at.x > seen.x2 - 20 || at.y < seen.y1 + 20 || at.y > seen.y2 - 20))
+      cy.animate({ center: { eles: node } }, { duration: 160 });
   }, [focused, ready]);
 
   const onKeyDown = (event: KeyboardEvent) => {
@@ -124,8 +144,12 @@ export function LineageGraph({ animals, relatedMates, root, focused, onFocus, on
     else if (event.key === '-') zoomBy(cy, 1 / 1.3);
     else if (event.key === '0') cy.fit(undefined, 30);
     else if (event.key in arrows && current) {
-      const places = new Map(cy.nodes('.animal').map((node): [string, Point] => [node.id(), node.position()]));
-      const next = focused ? neighbourOf(current, arrows[event.key as keyof typeof arrows], byKey, matings, places) : current;
+      const places = new Map(
+        cy.nodes('.animal').map((node): [string, Point] => [node.id(), node.position()]),
+      );
+      const next = focused
+        ? neighbourOf(current, arrows[event.key as keyof typeof arrows], byKey, matings, places)
+        : current;
       if (next) onFocus(next);
     } else return;
     event.preventDefault();
@@ -139,13 +163,17 @@ export function LineageGraph({ animals, relatedMates, root, focused, onFocus, on
         tabIndex={0}
         aria-label="Lineage graph. Arrow keys go to parents, young and along the row, Enter opens the record, plus and minus zoom. The table says the same."
         onKeyDown={onKeyDown}
-        className="absolute inset-0 focus-visible:outline-2 focus-visible:-outline-offset-2 focus-visible:outline-focus"
+        className="h-full w-full focus-visible:outline-2 focus-visible:-outline-offset-2 focus-visible:outline-focus"
       />
       <p aria-live="polite" className="sr-only">
         {focused ? describe(focused) : ''}
       </p>
       {ready ? null : (
-        <div role="status" aria-label="Drawing the lineage" className="absolute inset-0 grid place-items-center">
+        <div
+          role="status"
+          aria-label="Drawing the lineage"
+          className="absolute inset-0 grid place-items-center"
+        >
           <Spinner className="size-6" />
         </div>
       )}
@@ -165,7 +193,10 @@ export function LineageGraph({ animals, relatedMates, root, focused, onFocus, on
 }
 
 let hasDagre = false;
-function registerDagre(cytoscape: typeof import('cytoscape'), dagre: Parameters<typeof cytoscape.use>[0]): void {
+function registerDagre(
+  cytoscape: typeof import('cytoscape'),
+  dagre: Parameters<typeof cytoscape.use>[0],
+): void {
   if (!hasDagre) cytoscape.use(dagre);
   hasDagre = true;
 }
@@ -181,10 +212,16 @@ function dataOf(animal: LineageAnimal): NodeData {
   };
 }
 
-function elementsOf(animals: readonly LineageAnimal[], matings: readonly Mating[], root: string | null): ElementDefinition[] {
+function elementsOf(
+  animals: readonly LineageAnimal[],
+  matings: readonly Mating[],
+  root: string | null,
+): ElementDefinition[] {
   const nodes = animals.map((animal): ElementDefinition => ({
     data: dataOf(animal),
-    classes: ['animal', animal.sex, animal.shown ? '' : 'hidden', animal.key === root ? 'root' : ''].join(' '),
+    classes: ['animal', animal.sex, animal.shown ? '' : 'hidden', animal.key === root ? 'root' : ''].join(
+      ' ',
+    ),
   }));
   const keys = new Set(animals.map(({ key }) => key));
   const lines = matings.flatMap(({ id, sires, dam, young, related }): ElementDefinition[] => [
@@ -202,9 +239,20 @@ function elementsOf(animals: readonly LineageAnimal[], matings: readonly Mating[
 
 /** Generations from top to bottom by dagre, then matings moved onto the line between parents who stand side by side. */
 function layOut(cy: Core, matings: readonly Mating[]): void {
-  const options = { name: 'dagre', rankDir: 'TB', nodeSep: 26, rankSep: 34, edgeSep: 6, ranker: 'network-simplex', animate: false, fit: false };
+  const options = {
+    name: 'dagre',
+    rankDir: 'TB',
+    nodeSep: 26,
+    rankSep: 34,
+    edgeSep: 6,
+    ranker: 'network-simplex',
+    animate: false,
+    fit: false,
+  };
   cy.layout(options).run();
-  const places = new Map(cy.nodes('.animal').map((node): [string, Point] => [node.id(), { ...node.position() }]));
+  const places = new Map(
+    cy.nodes('.animal').map((node): [string, Point] => [node.id(), { ...node.position() }]),
+  );
   cy.batch(() => {
     for (const [id, place] of placeMatings(matings, places)) {
       const node = cy.getElementById(id);
@@ -216,7 +264,9 @@ function layOut(cy: Core, matings: readonly Mating[]): void {
 
 function colour(cy: Core, container: Element): void {
   const colours = readColours(container);
-  cy.batch(() => cy.nodes('.animal').forEach((node) => void node.style(looksOf(node.data() as NodeData, colours))));
+  cy.batch(() =>
+    cy.nodes('.animal').forEach((node) => void node.style(looksOf(node.data() as NodeData, colours))),
+  );
 }
 
 /** Everything if it can be read then, otherwise the root with its nearest relatives. */

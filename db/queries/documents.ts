@@ -8,7 +8,13 @@ import { visibleAnimal, type Visibility } from './visibility';
 /** Documents of an animal that the caller has already been let see, newest first. */
 export async function listDocuments(tx: Transaction, animalId: AnimalId) {
   return tx
-    .select({ id: documents.id, name: documents.name, contentType: documents.contentType, bytes: documents.bytes, createdAt: documents.createdAt })
+    .select({
+      id: documents.id,
+      name: documents.name,
+      contentType: documents.contentType,
+      bytes: documents.bytes,
+      createdAt: documents.createdAt,
+    })
     .from(documents)
     .where(and(eq(documents.subjectKind, 'animal'), eq(documents.subjectId, animalId)))
     .orderBy(desc(documents.createdAt));
@@ -19,12 +25,18 @@ export async function findAnimalDocument(tx: Transaction, sees: Visibility, id: 
   const [row] = await tx
     .select({ document: documents, animalId: animals.id, code: animals.code })
     .from(documents)
-    .innerJoin(animals, and(eq(animals.workspaceId, documents.workspaceId), eq(animals.id, documents.subjectId)))
+    .innerJoin(
+      animals,
+      and(eq(animals.workspaceId, documents.workspaceId), eq(animals.id, documents.subjectId)),
+    )
     .where(and(eq(documents.id, id), eq(documents.subjectKind, 'animal'), visibleAnimal(tx, sees)));
   return row ?? null;
 }
 
-export async function insertDocument(tx: Transaction, row: typeof documents.$inferInsert & { id: DocumentId }): Promise<void> {
+export async function insertDocument(
+  tx: Transaction,
+  row: typeof documents.$inferInsert & { id: DocumentId },
+): Promise<void> {
   await tx.insert(documents).values(row);
 }
 

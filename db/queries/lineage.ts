@@ -28,7 +28,10 @@ export async function loadPedigree(tx: Transaction, speciesId: SpeciesId) {
   const sires = await tx
     .select({ animalId: possibleSires.animalId, sireId: possibleSires.sireId, weight: possibleSires.weight })
     .from(possibleSires)
-    .innerJoin(animals, and(eq(animals.workspaceId, possibleSires.workspaceId), eq(animals.id, possibleSires.animalId)))
+    .innerJoin(
+      animals,
+      and(eq(animals.workspaceId, possibleSires.workspaceId), eq(animals.id, possibleSires.animalId)),
+    )
     .where(eq(animals.speciesId, speciesId))
     .orderBy(asc(possibleSires.animalId), asc(possibleSires.sireId));
   return { rows, possibleSires: sires };
@@ -40,7 +43,10 @@ export async function loadClaims(tx: Transaction, speciesId: SpeciesId) {
   return tx
     .select({ animalId: animalLoci.animalId, locusId: animalLoci.locusId, claim: animalLoci.claim })
     .from(animalLoci)
-    .innerJoin(animals, and(eq(animals.workspaceId, animalLoci.workspaceId), eq(animals.id, animalLoci.animalId)))
+    .innerJoin(
+      animals,
+      and(eq(animals.workspaceId, animalLoci.workspaceId), eq(animals.id, animalLoci.animalId)),
+    )
     .where(eq(animals.speciesId, speciesId));
 }
 
@@ -58,7 +64,7 @@ export async function loadSpeciesForComputing(tx: Transaction, speciesId: Specie
     .from(combinations)
     .where(eq(combinations.speciesId, speciesId))
     .orderBy(asc(combinations.name));
-    // The row's id is the one that claims and combinations go by, wherever the definition was written.
+  // The row's id is the one that claims and combinations go by, wherever the definition was written.
   const defined = rows.map((locus) => ({ ...locus, definition: { ...locus.definition, id: locus.id } }));
   return { species: row, loci: defined, combinations: named };
 }
@@ -98,7 +104,14 @@ export async function ancestorIds(tx: Transaction, of: readonly AnimalId[]): Pro
 }
 
 /** The animals of a species that are seen. */
-export async function visibleIdsOfSpecies(tx: Transaction, sees: Visibility, speciesId: SpeciesId): Promise<Set<AnimalId>> {
-  const rows = await tx.select({ id: animals.id }).from(animals).where(and(eq(animals.speciesId, speciesId), visibleAnimal(tx, sees)));
+export async function visibleIdsOfSpecies(
+  tx: Transaction,
+  sees: Visibility,
+  speciesId: SpeciesId,
+): Promise<Set<AnimalId>> {
+  const rows = await tx
+    .select({ id: animals.id })
+    .from(animals)
+    .where(and(eq(animals.speciesId, speciesId), visibleAnimal(tx, sees)));
   return new Set(rows.map((row) => row.id));
 }

@@ -11,21 +11,35 @@ export async function listOwnership(tx: Transaction, animalId: AnimalId) {
   const sets = await tx
     .select({ set: ownerships, recordedBy: users.name })
     .from(ownerships)
-    .leftJoin(members, and(eq(members.workspaceId, ownerships.workspaceId), eq(members.id, ownerships.recordedBy)))
+    .leftJoin(
+      members,
+      and(eq(members.workspaceId, ownerships.workspaceId), eq(members.id, ownerships.recordedBy)),
+    )
     .leftJoin(users, eq(users.id, members.userId))
     .where(eq(ownerships.animalId, animalId))
     .orderBy(desc(ownerships.fromDay), desc(ownerships.recordedAt));
   const parts = sets.length
     ? await tx
-        .select({ ownershipId: ownershipParts.ownershipId, partyId: ownershipParts.partyId, parts: ownershipParts.parts })
+        .select({
+          ownershipId: ownershipParts.ownershipId,
+          partyId: ownershipParts.partyId,
+          parts: ownershipParts.parts,
+        })
         .from(ownershipParts)
-        .where(inArray(ownershipParts.ownershipId, sets.map(({ set }) => set.id)))
+        .where(
+          inArray(
+            ownershipParts.ownershipId,
+            sets.map(({ set }) => set.id),
+          ),
+        )
         .orderBy(asc(ownershipParts.partyId))
     : [];
   return sets.map(({ set, recordedBy }) => ({
     ...set,
     recordedBy,
-    parts: parts.filter(({ ownershipId }) => ownershipId === set.id).map(({ partyId, parts: held }) => ({ partyId, parts: held })),
+    parts: parts
+      .filter(({ ownershipId }) => ownershipId === set.id)
+      .map(({ partyId, parts: held }) => ({ partyId, parts: held })),
   }));
 }
 
@@ -60,7 +74,16 @@ export async function insertOwnership(
 ): Promise<string> {
   const id = crypto.randomUUID();
   await tx.insert(ownerships).values({ ...set, workspaceId: workspace.id, id });
-  await tx.insert(ownershipParts).values(parts.map((part) => ({ workspaceId: workspace.id, ownershipId: id, partyId: part.partyId, parts: part.parts })));
+  await tx
+    .insert(ownershipParts)
+    .values(
+      parts.map((part) => ({
+        workspaceId: workspace.id,
+        ownershipId: id,
+        partyId: part.partyId,
+        parts: part.parts,
+      })),
+    );
   return id;
 }
 

@@ -8,7 +8,13 @@ import { visibleAnimal, type Visibility } from './visibility';
 /** Photos of an animal that the caller has already been let see, in order. */
 export async function listPhotos(tx: Transaction, animalId: AnimalId) {
   return tx
-    .select({ id: photos.id, width: photos.width, height: photos.height, caption: photos.caption, takenOn: photos.takenOn })
+    .select({
+      id: photos.id,
+      width: photos.width,
+      height: photos.height,
+      caption: photos.caption,
+      takenOn: photos.takenOn,
+    })
     .from(photos)
     .where(eq(photos.animalId, animalId))
     .orderBy(asc(photos.position), asc(photos.createdAt));
@@ -24,7 +30,10 @@ export async function findPhoto(tx: Transaction, sees: Visibility, id: PhotoId) 
   return row ?? null;
 }
 
-export async function insertPhoto(tx: Transaction, row: typeof photos.$inferInsert & { id: PhotoId }): Promise<void> {
+export async function insertPhoto(
+  tx: Transaction,
+  row: typeof photos.$inferInsert & { id: PhotoId },
+): Promise<void> {
   const [last] = await tx
     .select({ next: sql<number>`coalesce(max(${photos.position}), -1)::int + 1` })
     .from(photos)
@@ -33,7 +42,10 @@ export async function insertPhoto(tx: Transaction, row: typeof photos.$inferInse
 }
 
 export async function countPhotos(tx: Transaction, animalId: AnimalId): Promise<number> {
-  const [row] = await tx.select({ n: sql<number>`count(*)::int` }).from(photos).where(eq(photos.animalId, animalId));
+  const [row] = await tx
+    .select({ n: sql<number>`count(*)::int` })
+    .from(photos)
+    .where(eq(photos.animalId, animalId));
   return row?.n ?? 0;
 }
 
@@ -43,8 +55,14 @@ export async function updateCaption(tx: Transaction, id: PhotoId, caption: strin
 
 /** Puts a photo before all others of its animal. */
 export async function showPhotoFirst(tx: Transaction, animalId: AnimalId, id: PhotoId): Promise<void> {
-  const [first] = await tx.select({ least: sql<number>`min(${photos.position})::int` }).from(photos).where(eq(photos.animalId, animalId));
-  await tx.update(photos).set({ position: (first?.least ?? 0) - 1 }).where(eq(photos.id, id));
+  const [first] = await tx
+    .select({ least: sql<number>`min(${photos.position})::int` })
+    .from(photos)
+    .where(eq(photos.animalId, animalId));
+  await tx
+    .update(photos)
+    .set({ position: (first?.least ?? 0) - 1 })
+    .where(eq(photos.id, id));
 }
 
 export async function deletePhoto(tx: Transaction, id: PhotoId): Promise<void> {

@@ -27,12 +27,20 @@ export async function findSpecies(tx: Transaction, id: SpeciesId) {
   return row ?? null;
 }
 
-export async function insertSpecies(tx: Transaction, row: typeof species.$inferInsert & { id: SpeciesId }): Promise<void> {
+export async function insertSpecies(
+  tx: Transaction,
+  row: typeof species.$inferInsert & { id: SpeciesId },
+): Promise<void> {
   await tx.insert(species).values(row);
 }
 
 /** @returns whether the row still had the version that was seen */
-export async function updateSpecies(tx: Transaction, id: SpeciesId, seen: number, change: Partial<typeof species.$inferInsert>): Promise<boolean> {
+export async function updateSpecies(
+  tx: Transaction,
+  id: SpeciesId,
+  seen: number,
+  change: Partial<typeof species.$inferInsert>,
+): Promise<boolean> {
   const rows = await tx
     .update(species)
     .set({ ...change, version: seen + 1 })
@@ -60,7 +68,10 @@ export async function findCombination(tx: Transaction, id: CombinationId) {
   return row ?? null;
 }
 
-export async function insertCombination(tx: Transaction, row: typeof combinations.$inferInsert & { id: CombinationId }): Promise<void> {
+export async function insertCombination(
+  tx: Transaction,
+  row: typeof combinations.$inferInsert & { id: CombinationId },
+): Promise<void> {
   await tx.insert(combinations).values(row);
 }
 

@@ -21,7 +21,12 @@ export async function listTubs(tx: Transaction, sees: Visibility) {
     .from(tubs)
     .leftJoin(
       animals,
-      and(eq(animals.workspaceId, tubs.workspaceId), eq(animals.tubId, tubs.id), inArray(animals.status, ['here', 'quarantine']), visibleAnimal(tx, sees)),
+      and(
+        eq(animals.workspaceId, tubs.workspaceId),
+        eq(animals.tubId, tubs.id),
+        inArray(animals.status, ['here', 'quarantine']),
+        visibleAnimal(tx, sees),
+      ),
     )
     .groupBy(tubs.workspaceId, tubs.id)
     .orderBy(asc(tubs.room), asc(tubs.rack), asc(tubs.rowNumber), asc(tubs.columnNumber));
@@ -32,14 +37,27 @@ export async function findTub(tx: Transaction, id: TubId) {
   return row ?? null;
 }
 
-export async function findTubAt(tx: Transaction, place: { room: string; rack: string; rowNumber: number; columnNumber: number }) {
+export async function findTubAt(
+  tx: Transaction,
+  place: { room: string; rack: string; rowNumber: number; columnNumber: number },
+) {
   const [row] = await tx
     .select({ id: tubs.id, label: tubs.label })
     .from(tubs)
-    .where(and(eq(tubs.room, place.room), eq(tubs.rack, place.rack), eq(tubs.rowNumber, place.rowNumber), eq(tubs.columnNumber, place.columnNumber)));
+    .where(
+      and(
+        eq(tubs.room, place.room),
+        eq(tubs.rack, place.rack),
+        eq(tubs.rowNumber, place.rowNumber),
+        eq(tubs.columnNumber, place.columnNumber),
+      ),
+    );
   return row ?? null;
 }
 
-export async function insertTub(tx: Transaction, row: typeof tubs.$inferInsert & { id: TubId }): Promise<void> {
+export async function insertTub(
+  tx: Transaction,
+  row: typeof tubs.$inferInsert & { id: TubId },
+): Promise<void> {
   await tx.insert(tubs).values(row);
 }

@@ -5,7 +5,14 @@ import type { z } from 'zod';
 import { importAnimals, previewImport } from '@/lib/contracts/animal-import';
 import { changeAnimals, exportAnimals, listAnimals } from '@/lib/contracts/animal-list';
 import { recordOwnership } from '@/lib/contracts/animal-ownership';
-import { addWeight, createAnimal, editAnimal, proposeCode, removeWeight, showAnimal } from '@/lib/contracts/animal-record';
+import {
+  addWeight,
+  createAnimal,
+  editAnimal,
+  proposeCode,
+  removeWeight,
+  showAnimal,
+} from '@/lib/contracts/animal-record';
 import type { Contract } from '@/lib/contracts/contract';
 import { addDocument, removeDocument, showDocument } from '@/lib/contracts/document';
 import type { AnimalId, DocumentId, PhotoId, SpeciesId } from '@/lib/contracts/ids';
@@ -24,17 +31,27 @@ const animalAnswers: readonly Contract[] = [listAnimals, showAnimal, showLineage
 /** Animals that match; the rows before stay in sight while the next are fetched. */
 export function useAnimals(query: AnimalListQuery) {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(listAnimals, { params: { workspace }, query }), placeholderData: keepPreviousData });
+  return useQuery({
+    ...optionsOf(listAnimals, { params: { workspace }, query }),
+    placeholderData: keepPreviousData,
+  });
 }
 
 export function useAnimal(animal: AnimalId | null) {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(showAnimal, { params: { workspace, animal: animal ?? '' } }), enabled: animal !== null });
+  return useQuery({
+    ...optionsOf(showAnimal, { params: { workspace, animal: animal ?? '' } }),
+    enabled: animal !== null,
+  });
 }
 
 export function useProposedCode(species: SpeciesId | '') {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(proposeCode, { params: { workspace }, query: { species } }), enabled: species !== '', staleTime: 0 });
+  return useQuery({
+    ...optionsOf(proposeCode, { params: { workspace }, query: { species } }),
+    enabled: species !== '',
+    staleTime: 0,
+  });
 }
 
 export const useCreateAnimal = () => useContractMutation(createAnimal, animalAnswers);
@@ -61,8 +78,10 @@ export const useCreateTub = () => useContractMutation(createTub, [listTubs]);
 export function useFileAddresses() {
   const workspace = useWorkspaceSlug();
   return {
-    photo: (photo: PhotoId, size: 'large' | 'small') => addressOf(showPhoto, { params: { workspace, photo }, query: { size } }),
+    photo: (photo: PhotoId, size: 'large' | 'small') =>
+      addressOf(showPhoto, { params: { workspace, photo }, query: { size } }),
     document: (document: DocumentId) => addressOf(showDocument, { params: { workspace, document } }),
-    csv: (query: z.input<typeof exportAnimals.query>) => addressOf(exportAnimals, { params: { workspace }, query }),
+    csv: (query: z.input<typeof exportAnimals.query>) =>
+      addressOf(exportAnimals, { params: { workspace }, query }),
   };
 }

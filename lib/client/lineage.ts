@@ -10,5 +10,9 @@ import { useWorkspaceSlug } from './workspace';
 export function useLineage(query: z.input<typeof showLineage.query>) {
   const workspace = useWorkspaceSlug();
   const asks = Boolean(query.animal) !== Boolean(query.species);
-  return useQuery({ ...optionsOf(showLineage, { params: { workspace }, query }), placeholderData: keepPreviousData, enabled: asks });
+  return useQuery({
+    ...optionsOf(showLineage, { params: { workspace }, query }),
+    placeholderData: keepPreviousData,
+    enabled: asks,
+  });
 }

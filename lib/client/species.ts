@@ -5,7 +5,13 @@ import { listAnimals } from '@/lib/contracts/animal-list';
 import { showAnimal } from '@/lib/contracts/animal-record';
 import type { Contract } from '@/lib/contracts/contract';
 import { showLineage } from '@/lib/contracts/lineage';
-import { createCombination, createLocus, editLocus, removeCombination, removeLocus } from '@/lib/contracts/locus';
+import {
+  createCombination,
+  createLocus,
+  editLocus,
+  removeCombination,
+  removeLocus,
+} from '@/lib/contracts/locus';
 import { createSpecies, editSpecies, listSpecies, showSpecies } from '@/lib/contracts/species-catalogue';
 import { optionsOf, useContractMutation } from './queries';
 import { useWorkspaceSlug } from './workspace';
@@ -21,7 +27,11 @@ export function useSpeciesList() {
 /** A species with its loci; asks nothing while none is chosen. */
 export function useSpecies(species: string) {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(showSpecies, { params: { workspace, species } }), enabled: species !== '', staleTime: 60_000 });
+  return useQuery({
+    ...optionsOf(showSpecies, { params: { workspace, species } }),
+    enabled: species !== '',
+    staleTime: 60_000,
+  });
 }
 
 export const useCreateSpecies = () => useContractMutation(createSpecies, geneticAnswers);

@@ -31,8 +31,24 @@ export type AnimalRow = z.infer<typeof animalRow>;
 
 /** Columns that the list sorts by; a minus in front turns the order round. */
 export const animalSort = z.enum([
-  'code', '-code', 'name', '-name', 'species', '-species', 'sex', '-sex', 'hatched', '-hatched',
-  'status', '-status', 'looks', '-looks', 'place', '-place', 'weight', '-weight',
+  'code',
+  '-code',
+  'name',
+  '-name',
+  'species',
+  '-species',
+  'sex',
+  '-sex',
+  'hatched',
+  '-hatched',
+  'status',
+  '-status',
+  'looks',
+  '-looks',
+  'place',
+  '-place',
+  'weight',
+  '-weight',
 ]);
 export type AnimalSort = z.infer<typeof animalSort>;
 

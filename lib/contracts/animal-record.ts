@@ -2,14 +2,31 @@ import { z } from 'zod';
 import { animalOrigin, animalStatus, locusClaim, ownershipReason, sex } from './animal';
 import { hatchedPrecision, ownedParts } from './animal-list';
 import { contract, inWorkspace, instant, isoDay, minorUnits } from './contract';
-import { animalId, clutchId, documentId, locusId, pairingId, photoId, projectId, speciesId, tubId } from './ids';
+import {
+  animalId,
+  clutchId,
+  documentId,
+  locusId,
+  pairingId,
+  photoId,
+  projectId,
+  speciesId,
+  tubId,
+} from './ids';
 import { partyMark } from './session';
 
 export const inAnimal = inWorkspace.extend({ animal: animalId });
 
 /** A relative: with its code if the caller may see it, otherwise only that there is one. */
 export const relative = z.discriminatedUnion('shown', [
-  z.object({ shown: z.literal(true), id: animalId, code: z.string(), name: z.string(), sex, description: z.string() }),
+  z.object({
+    shown: z.literal(true),
+    id: animalId,
+    code: z.string(),
+    name: z.string(),
+    sex,
+    description: z.string(),
+  }),
   z.object({ shown: z.literal(false) }),
 ]);
 export type Relative = z.infer<typeof relative>;
@@ -73,13 +90,37 @@ export const animalRecord = z.object({
   parties: z.array(partyMark),
   ownership: z.array(ownershipSet),
   weights: z.array(z.object({ id: z.uuid(), weighedOn: isoDay, grams: z.int() })),
-  photos: z.array(z.object({ id: photoId, width: z.int(), height: z.int(), caption: z.string(), takenOn: isoDay.nullable() })),
+  photos: z.array(
+    z.object({
+      id: photoId,
+      width: z.int(),
+      height: z.int(),
+      caption: z.string(),
+      takenOn: isoDay.nullable(),
+    }),
+  ),
   documents: z.array(
-    z.object({ id: documentId, name: z.string(), contentType: z.string(), bytes: z.int(), createdAt: instant }),
+    z.object({
+      id: documentId,
+      name: z.string(),
+      contentType: z.string(),
+      bytes: z.int(),
+      createdAt: instant,
+    }),
   ),
   projects: z.array(z.object({ id: projectId, name: z.string() })),
-  pairings: z.array(z.object({ id: pairingId, season: z.int(), status: z.string(), as: z.enum(['sire', 'dam']), mate: relative })),
-  clutches: z.array(z.object({ id: clutchId, code: z.string(), laidOn: isoDay, as: z.enum(['sire', 'dam']) })),
+  pairings: z.array(
+    z.object({
+      id: pairingId,
+      season: z.int(),
+      status: z.string(),
+      as: z.enum(['sire', 'dam']),
+      mate: relative,
+    }),
+  ),
+  clutches: z.array(
+    z.object({ id: clutchId, code: z.string(), laidOn: isoDay, as: z.enum(['sire', 'dam']) }),
+  ),
   hatchedFrom: z.object({ id: clutchId, code: z.string() }).nullable(),
 });
 export type AnimalRecord = z.infer<typeof animalRecord>;
@@ -88,13 +129,17 @@ export const showAnimal = contract({
   id: 'animals.show',
   method: 'GET',
   path: '/workspaces/{workspace}/animals/{animal}',
-  summary: 'The record of an animal: what it is and carries, its relatives, owners, weights, photos and papers',
+  summary:
+    'The record of an animal: what it is and carries, its relatives, owners, weights, photos and papers',
   access: { scope: 'workspace', action: 'animal.see' },
   params: inAnimal,
   response: animalRecord,
 });
 
-const possibleSire = z.object({ animalId, weight: z.int('Whole numbers.').min(1, 'At least 1.').max(1000).default(1) });
+const possibleSire = z.object({
+  animalId,
+  weight: z.int('Whole numbers.').min(1, 'At least 1.').max(1000).default(1),
+});
 const claimAtLocus = z.object({ locusId, ...locusClaim.shape });
 
 const animalFields = {

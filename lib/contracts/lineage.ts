@@ -33,7 +33,8 @@ export const showLineage = contract({
   id: 'lineage.show',
   method: 'GET',
   path: '/workspaces/{workspace}/lineage',
-  summary: 'Ancestors and descendants of an animal, or every animal of a species, with the matings of relatives marked',
+  summary:
+    'Ancestors and descendants of an animal, or every animal of a species, with the matings of relatives marked',
   access: { scope: 'workspace', action: 'animal.see' },
   query: z
     .object({

@@ -5,16 +5,27 @@ import { combinationId, locusId, speciesId } from './ids';
 
 const genotype = z.string().min(1).max(40);
 /** Looks stand in lists and files, between commas and bars. */
-const look = z.string().trim().max(60).regex(/^[^,|:;]*$/, 'Without commas, colons, semicolons or bars.');
+const look = z
+  .string()
+  .trim()
+  .max(60)
+  .regex(/^[^,|:;]*$/, 'Without commas, colons, semicolons or bars.');
 const odds = z.string().regex(/^\d+(\.\d+)?(\/[1-9]\d*)?$/, 'A fraction such as 9/10.');
 
 /** Everything of a locus but its id and name, which the row holds. */
 export const locusDefinition = z.object({
   symbol: z.string().trim().min(1, 'A short sign, such as alb.').max(8),
   chromosome: z.enum(['autosomal', 'X', 'Z']),
-  linkage: z.object({ group: z.string().trim().min(1).max(20), position: z.number().min(0).max(1000) }).nullable(),
+  linkage: z
+    .object({ group: z.string().trim().min(1).max(20), position: z.number().min(0).max(1000) })
+    .nullable(),
   alleles: z
-    .array(z.object({ symbol: z.string().trim().min(1, 'A sign, such as +.').max(8), name: z.string().trim().min(1, 'A name.').max(60) }))
+    .array(
+      z.object({
+        symbol: z.string().trim().min(1, 'A sign, such as +.').max(8),
+        name: z.string().trim().min(1, 'A name.').max(60),
+      }),
+    )
     .min(2, 'The wild type and at least one other allele.')
     .max(12),
   phenotypes: z.record(genotype, look),
@@ -28,10 +39,18 @@ export const locusDefinition = z.object({
       genotypes: z.array(genotype),
     }),
   ),
-  source: z.object({ citation: z.string().trim().min(1, 'Say where it is from, or "own observation".').max(300), certainty: z.enum(['read', 'memory', 'common practice']) }),
+  source: z.object({
+    citation: z.string().trim().min(1, 'Say where it is from, or "own observation".').max(300),
+    certainty: z.enum(['read', 'memory', 'common practice']),
+  }),
 }) satisfies z.ZodType<Omit<LocusDefinition, 'id' | 'name'>>;
 
-const locusName = z.string().trim().min(1, 'Name the locus.').max(60).regex(/^[^,|:;]*$/, 'Without commas, colons, semicolons or bars.');
+const locusName = z
+  .string()
+  .trim()
+  .min(1, 'Name the locus.')
+  .max(60)
+  .regex(/^[^,|:;]*$/, 'Without commas, colons, semicolons or bars.');
 
 const genotypeEntry = z.object({
   genotype: z.string(),
@@ -51,7 +70,11 @@ export const locusEntry = z.object({
   /** How many animals something is recorded of here. */
   recorded: z.int(),
   /** What an animal of each sex may be, wild type first. */
-  genotypes: z.object({ male: z.array(genotypeEntry), female: z.array(genotypeEntry), unknown: z.array(genotypeEntry) }),
+  genotypes: z.object({
+    male: z.array(genotypeEntry),
+    female: z.array(genotypeEntry),
+    unknown: z.array(genotypeEntry),
+  }),
 });
 export type LocusEntry = z.infer<typeof locusEntry>;
 
@@ -99,7 +122,9 @@ export const createCombination = contract({
   params: inSpecies,
   body: z.object({
     name: z.string().trim().min(1, 'Name the combination.').max(60),
-    phenotypes: z.record(z.string(), z.string().min(1)).refine((looks) => Object.keys(looks).length >= 2, 'Choose looks at two loci or more.'),
+    phenotypes: z
+      .record(z.string(), z.string().min(1))
+      .refine((looks) => Object.keys(looks).length >= 2, 'Choose looks at two loci or more.'),
   }),
   response: z.object({ id: combinationId }),
 });

@@ -10,7 +10,10 @@ const speciesFields = {
   name: z.string().trim().min(1, 'Name the species.').max(80),
   scientificName: z.string().trim().max(120),
   sexSystem,
-  codePrefix: z.string().trim().regex(/^[A-Z]{1,6}$/, 'One to six capital letters, such as BP.'),
+  codePrefix: z
+    .string()
+    .trim()
+    .regex(/^[A-Z]{1,6}$/, 'One to six capital letters, such as BP.'),
   profile: speciesProfile,
 };
 const inSpecies = inWorkspace.extend({ species: speciesId });
@@ -34,7 +37,9 @@ export const showSpecies = contract({
   params: inSpecies,
   response: speciesEntry.extend({
     loci: z.array(locusEntry),
-    combinations: z.array(z.object({ id: combinationId, name: z.string(), phenotypes: z.record(z.string(), z.string()) })),
+    combinations: z.array(
+      z.object({ id: combinationId, name: z.string(), phenotypes: z.record(z.string(), z.string()) }),
+    ),
   }),
 });
 export type SpeciesDetail = z.infer<typeof showSpecies.response>;

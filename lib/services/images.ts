@@ -38,7 +38,12 @@ export async function prepareImage(content: Uint8Array): Promise<PreparedImage |
       .resize({ width: SMALL, height: SMALL, fit: 'inside', withoutEnlargement: true })
       .webp({ quality: 76 })
       .toBuffer();
-    return { large: new Uint8Array(large.data), small: new Uint8Array(small), width: large.info.width, height: large.info.height };
+    return {
+      large: new Uint8Array(large.data),
+      small: new Uint8Array(small),
+      width: large.info.width,
+      height: large.info.height,
+    };
   } catch {
     return null;
   }

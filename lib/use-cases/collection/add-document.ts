@@ -10,7 +10,8 @@ import { notFound, Refusal } from '../refusal';
 import { workspaceUseCase } from '../world';
 
 const MOST_BYTES = 10 * 1024 * 1024;
-const notTaken = 'Only PDF, JPEG, PNG and plain text are kept. This file is something else, whatever its name says.';
+const notTaken =
+  'Only PDF, JPEG, PNG and plain text are kept. This file is something else, whatever its name says.';
 
 /** A member keeps a paper with an animal: an import permit, a health certificate, a receipt. */
 export const addDocumentUseCase = workspaceUseCase(addDocument, async (world, { params, body }) => {
@@ -20,7 +21,8 @@ export const addDocumentUseCase = workspaceUseCase(addDocument, async (world, { 
   if (body.file.size > MOST_BYTES) throw new Refusal('too_large', 'This document is larger than 10 MB.');
   const content = new Uint8Array(await body.file.arrayBuffer());
   const contentType = sniffDocument(content);
-  if (!contentType) throw new Refusal('unsupported_file', notTaken, { errors: [{ field: 'file', message: notTaken }] });
+  if (!contentType)
+    throw new Refusal('unsupported_file', notTaken, { errors: [{ field: 'file', message: notTaken }] });
   const id = crypto.randomUUID() as DocumentId;
   const storageKey = `documents/${workspace.id}/${id}`;
   await services.storage.write(storageKey, content, contentType);
@@ -37,6 +39,10 @@ export const addDocumentUseCase = workspaceUseCase(addDocument, async (world, { 
     sha256: createHash('sha256').update(content).digest('hex'),
     uploadedBy: actor.memberId,
   });
-  await recordAudit(world, { action: 'document.add', subject: { kind: 'animal', id: animal.id }, detail: { code: animal.code, name, contentType } });
+  await recordAudit(world, {
+    action: 'document.add',
+    subject: { kind: 'animal', id: animal.id },
+    detail: { code: animal.code, name, contentType },
+  });
   return { id };
 });

@@ -22,12 +22,22 @@ export const addPhotoUseCase = workspaceUseCase(addPhoto, async (world, { params
   if (!animal) throw notFound('animal');
   if (body.file.size > MOST_BYTES) throw new Refusal('too_large', 'This photo is larger than 15 MB.');
   if (body.takenOn && body.takenOn > today) throw invalid('takenOn', 'This day has not come yet.');
-  if ((await countPhotos(tx, animal.id)) >= MOST_PHOTOS) throw invalid('file', `${animal.code} has ${MOST_PHOTOS} photos already; remove one first.`);
+  if ((await countPhotos(tx, animal.id)) >= MOST_PHOTOS)
+    throw invalid('file', `${animal.code} has ${MOST_PHOTOS} photos already; remove one first.`);
   const image = await prepareImage(new Uint8Array(await body.file.arrayBuffer()));
   if (!image) {
-    throw new Refusal('unsupported_file', 'This file is no picture that can be read here. Take a JPEG, PNG, WebP or GIF.', {
-      errors: [{ field: 'file', message: 'This file is no picture that can be read here. Take a JPEG, PNG, WebP or GIF.' }],
-    });
+    throw new Refusal(
+      'unsupported_file',
+      'This file is no picture that can be read here. Take a JPEG, PNG, WebP or GIF.',
+      {
+        errors: [
+          {
+            field: 'file',
+            message: 'This file is no picture that can be read here. Take a JPEG, PNG, WebP or GIF.',
+          },
+        ],
+      },
+    );
   }
   const id = crypto.randomUUID() as PhotoId;
   const storageKey = `photos/${workspace.id}/${id}.webp`;
@@ -45,6 +55,10 @@ export const addPhotoUseCase = workspaceUseCase(addPhoto, async (world, { params
     caption: body.caption,
     takenOn: body.takenOn ?? null,
   });
-  await recordAudit(world, { action: 'photo.add', subject: { kind: 'animal', id: animal.id }, detail: { code: animal.code, photo: id } });
+  await recordAudit(world, {
+    action: 'photo.add',
+    subject: { kind: 'animal', id: animal.id },
+    detail: { code: animal.code, photo: id },
+  });
   return { id };
 });

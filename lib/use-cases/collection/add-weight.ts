@@ -15,7 +15,13 @@ export const addWeightUseCase = workspaceUseCase(addWeight, async (world, { para
     throw invalid('weighedOn', `${animal.code} hatched on ${animal.hatchedOn}.`);
   }
   const id = crypto.randomUUID();
-  await insertWeights(tx, [{ workspaceId: workspace.id, id, animalId: animal.id, ...body, recordedBy: actor.memberId }]);
-  await recordAudit(world, { action: 'animal.weigh', subject: { kind: 'animal', id: animal.id }, detail: { code: animal.code, ...body } });
+  await insertWeights(tx, [
+    { workspaceId: workspace.id, id, animalId: animal.id, ...body, recordedBy: actor.memberId },
+  ]);
+  await recordAudit(world, {
+    action: 'animal.weigh',
+    subject: { kind: 'animal', id: animal.id },
+    detail: { code: animal.code, ...body },
+  });
   return { id };
 });

@@ -30,10 +30,17 @@ export const changeAnimalsUseCase = workspaceUseCase(changeAnimals, async (world
     if (!project) throw notFound('project');
     const other = found.find((animal) => animal.speciesId !== project.speciesId);
     if (other) throw invalid('change.projectId', `${other.code} is of another species than ${project.name}.`);
-    await addToProject(tx, ids.map((animalId) => ({ workspaceId: workspace.id, projectId: project.id, animalId, addedOn: today })));
+    await addToProject(
+      tx,
+      ids.map((animalId) => ({ workspaceId: workspace.id, projectId: project.id, animalId, addedOn: today })),
+    );
   }
   for (const animal of found) {
-    await recordAudit(world, { action: 'animal.change', subject: { kind: 'animal', id: animal.id }, detail: { code: animal.code, ...change } });
+    await recordAudit(world, {
+      action: 'animal.change',
+      subject: { kind: 'animal', id: animal.id },
+      detail: { code: animal.code, ...change },
+    });
   }
   return { changed: found.length };
 });

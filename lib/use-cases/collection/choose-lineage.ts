@@ -9,7 +9,9 @@ export interface PedigreeLinks {
 /** Known parents and possible sires of an animal. */
 export function parentsOf({ byId, possibleSires }: PedigreeLinks, id: AnimalId): AnimalId[] {
   const row = byId.get(id);
-  return [row?.sireId ?? null, row?.damId ?? null, ...(possibleSires.get(id) ?? [])].filter((parent) => parent !== null);
+  return [row?.sireId ?? null, row?.damId ?? null, ...(possibleSires.get(id) ?? [])].filter(
+    (parent) => parent !== null,
+  );
 }
 
 /**
@@ -18,11 +20,19 @@ export function parentsOf({ byId, possibleSires }: PedigreeLinks, id: AnimalId):
  * followed through it; young that may not be seen are left out.
  * @returns ids, those that are not `visible` to be shown without anything of theirs
  */
-export function chooseLineage(links: PedigreeLinks, visible: ReadonlySet<AnimalId>, root: AnimalId, up: number, down: number): Set<AnimalId> {
+export function chooseLineage(
+  links: PedigreeLinks,
+  visible: ReadonlySet<AnimalId>,
+  root: AnimalId,
+  up: number,
+  down: number,
+): Set<AnimalId> {
   const chosen = new Set<AnimalId>([root]);
   let level = [root];
   for (let generation = 0; generation < up && level.length; generation += 1) {
-    level = [...new Set(level.filter((id) => visible.has(id)).flatMap((id) => parentsOf(links, id)))].filter((id) => !chosen.has(id));
+    level = [...new Set(level.filter((id) => visible.has(id)).flatMap((id) => parentsOf(links, id)))].filter(
+      (id) => !chosen.has(id),
+    );
     for (const id of level) chosen.add(id);
   }
   const young = youngByParent(links);

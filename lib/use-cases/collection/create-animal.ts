@@ -1,5 +1,12 @@
 import 'server-only';
-import { addToProject, findVisibleProject, insertAnimal, isCodeTaken, replaceClaims, replacePossibleSires } from '@/db/queries/animals';
+import {
+  addToProject,
+  findVisibleProject,
+  insertAnimal,
+  isCodeTaken,
+  replaceClaims,
+  replacePossibleSires,
+} from '@/db/queries/animals';
 import { insertOwnership, listPartyMarks } from '@/db/queries/ownership';
 import { findSpecies } from '@/db/queries/species';
 import { createAnimal } from '@/lib/contracts/animal-record';
@@ -13,13 +20,21 @@ import { checkDraft } from './draft-animal';
 import { nextCodeOf } from './next-code-of';
 
 /** Checks that parts go to parties of the workspace, each once. */
-export async function checkParts({ tx }: Pick<WorkspaceWorld, 'tx'>, field: string, parts: readonly { partyId: PartyId; parts: number }[]): Promise<FieldError[]> {
+export async function checkParts(
+  { tx }: Pick<WorkspaceWorld, 'tx'>,
+  field: string,
+  parts: readonly { partyId: PartyId; parts: number }[],
+): Promise<FieldError[]> {
   const known = new Set((await listPartyMarks(tx)).map(({ id }) => id));
   const errors: FieldError[] = [];
   parts.forEach(({ partyId }, index) => {
-    if (!known.has(partyId)) errors.push({ field: `${field}.${index}.partyId`, message: 'There is no such party here.' });
+    if (!known.has(partyId))
+      errors.push({ field: `${field}.${index}.partyId`, message: 'There is no such party here.' });
     if (parts.findIndex((other) => other.partyId === partyId) < index) {
-      errors.push({ field: `${field}.${index}.partyId`, message: 'This party is named twice; give it all its parts in one line.' });
+      errors.push({
+        field: `${field}.${index}.partyId`,
+        message: 'This party is named twice; give it all its parts in one line.',
+      });
     }
   });
   return errors;
@@ -36,7 +51,8 @@ export const createAnimalUseCase = workspaceUseCase(createAnimal, async (world, 
   const draft = { ...fields, id, code, loci, possibleSires };
 
   const errors = await checkDraft(world, draft, await loadBeliefs(tx, species.id), new Set());
-  if (body.code && (await isCodeTaken(tx, body.code))) errors.push({ field: 'code', message: `Another animal already has the code ${body.code}.` });
+  if (body.code && (await isCodeTaken(tx, body.code)))
+    errors.push({ field: 'code', message: `Another animal already has the code ${body.code}.` });
   errors.push(...(await checkParts(world, 'owners', owners)));
   const since = ownedFrom ?? (body.hatchedPrecision === 'day' ? body.hatchedOn : null) ?? today;
   if (since > today) errors.push({ field: 'ownedFrom', message: 'This day has not come yet.' });
@@ -45,23 +61,51 @@ export const createAnimalUseCase = workspaceUseCase(createAnimal, async (world, 
   }
   errors.push(...(await checkProject(world, projectId, species.id)));
   if (!sees.everything && !owners.some(({ partyId }) => partyId === actor.partyId) && !projectId) {
-    errors.push({ field: 'owners', message: 'Give yourself a part, or put it into a project that you are in; you could not see it otherwise.' });
+    errors.push({
+      field: 'owners',
+      message:
+        'Give yourself a part, or put it into a project that you are in; you could not see it otherwise.',
+    });
   }
-  if (errors.length) throw new Refusal('invalid', errors[0]?.message ?? 'Something is not right.', { errors });
+  if (errors.length)
+    throw new Refusal('invalid', errors[0]?.message ?? 'Something is not right.', { errors });
 
   await insertAnimal(tx, { ...fields, workspaceId: workspace.id, id, code });
   await replacePossibleSires(tx, { workspaceId: workspace.id, id }, possibleSires);
-  await replaceClaims(tx, { workspaceId: workspace.id, id }, loci.map(({ locusId, ...claim }) => ({ locusId, claim })), today);
-  await insertOwnership(tx, workspace, { animalId: id, fromDay: since, reason: 'founding', recordedBy: actor.memberId }, owners);
-  if (projectId) await addToProject(tx, [{ workspaceId: workspace.id, projectId, animalId: id, addedOn: today }]);
-  await recordAudit(world, { action: 'animal.create', subject: { kind: 'animal', id }, detail: { code, speciesId: species.id, sex: body.sex, owners } });
+  await replaceClaims(
+    tx,
+    { workspaceId: workspace.id, id },
+    loci.map(({ locusId, ...claim }) => ({ locusId, claim })),
+    today,
+  );
+  await insertOwnership(
+    tx,
+    workspace,
+    { animalId: id, fromDay: since, reason: 'founding', recordedBy: actor.memberId },
+    owners,
+  );
+  if (projectId)
+    await addToProject(tx, [{ workspaceId: workspace.id, projectId, animalId: id, addedOn: today }]);
+  await recordAudit(world, {
+    action: 'animal.create',
+    subject: { kind: 'animal', id },
+    detail: { code, speciesId: species.id, sex: body.sex, owners },
+  });
   return { id, code };
 });
 
-async function checkProject({ tx, sees, actor }: WorkspaceWorld, projectId: Parameters<typeof findVisibleProject>[2] | null, speciesId: SpeciesId): Promise<FieldError[]> {
+async function checkProject(
+  { tx, sees, actor }: WorkspaceWorld,
+  projectId: Parameters<typeof findVisibleProject>[2] | null,
+  speciesId: SpeciesId,
+): Promise<FieldError[]> {
   if (!projectId) return [];
-  if (reachOf(actor.role, 'project.edit') === 'no') return [{ field: 'projectId', message: 'Your role does not include changing projects.' }];
+  if (reachOf(actor.role, 'project.edit') === 'no')
+    return [{ field: 'projectId', message: 'Your role does not include changing projects.' }];
   const project = await findVisibleProject(tx, sees, projectId);
-  if (!project) return [{ field: 'projectId', message: 'There is no such project here, or you may not see it.' }];
-  return project.speciesId === speciesId ? [] : [{ field: 'projectId', message: `${project.name} is a project of another species.` }];
+  if (!project)
+    return [{ field: 'projectId', message: 'There is no such project here, or you may not see it.' }];
+  return project.speciesId === speciesId
+    ? []
+    : [{ field: 'projectId', message: `${project.name} is a project of another species.` }];
 }

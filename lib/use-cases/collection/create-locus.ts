@@ -15,7 +15,17 @@ export const createLocusUseCase = workspaceUseCase(createLocus, async (world, { 
   const id = crypto.randomUUID() as LocusId;
   const definition = { ...body.definition, id, name: body.name };
   refuseUnsoundLocus(definition, species.sexSystem);
-  await insertLocus(world.tx, { workspaceId: world.workspace.id, id, speciesId: species.id, name: body.name, definition });
-  await recordAudit(world, { action: 'locus.create', subject: { kind: 'locus', id }, detail: { name: body.name, species: species.name } });
+  await insertLocus(world.tx, {
+    workspaceId: world.workspace.id,
+    id,
+    speciesId: species.id,
+    name: body.name,
+    definition,
+  });
+  await recordAudit(world, {
+    action: 'locus.create',
+    subject: { kind: 'locus', id },
+    detail: { name: body.name, species: species.name },
+  });
   return { id };
 });

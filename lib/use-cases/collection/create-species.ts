@@ -9,6 +9,10 @@ import { workspaceUseCase } from '../world';
 export const createSpeciesUseCase = workspaceUseCase(createSpecies, async (world, { body }) => {
   const id = crypto.randomUUID() as SpeciesId;
   await insertSpecies(world.tx, { workspaceId: world.workspace.id, id, ...body });
-  await recordAudit(world, { action: 'species.create', subject: { kind: 'species', id }, detail: { name: body.name } });
+  await recordAudit(world, {
+    action: 'species.create',
+    subject: { kind: 'species', id },
+    detail: { name: body.name },
+  });
   return { id };
 });

@@ -15,6 +15,10 @@ export const createTubUseCase = workspaceUseCase(createTub, async (world, { body
   }
   const id = crypto.randomUUID() as TubId;
   await insertTub(world.tx, { workspaceId: world.workspace.id, id, ...body });
-  await recordAudit(world, { action: 'tub.create', subject: { kind: 'tub', id }, detail: { label: body.label, rack: body.rack } });
+  await recordAudit(world, {
+    action: 'tub.create',
+    subject: { kind: 'tub', id },
+    detail: { label: body.label, rack: body.rack },
+  });
   return { id };
 });

@@ -23,19 +23,33 @@ export interface DraftAnimal extends AnimalFacts {
  * Everything that can be wrong with an animal before it is saved, each with its field. Relatives that stay as they
  * were are taken as they are, also where the caller may not see them; newly named ones have to be seen.
  */
-export async function checkDraft(world: WorkspaceWorld, draft: DraftAnimal, species: SpeciesBeliefs, kept: ReadonlySet<AnimalId>): Promise<FieldError[]> {
+export async function checkDraft(
+  world: WorkspaceWorld,
+  draft: DraftAnimal,
+  species: SpeciesBeliefs,
+  kept: ReadonlySet<AnimalId>,
+): Promise<FieldError[]> {
   const { tx, sees, today } = world;
   const errors: FieldError[] = [];
-  if (draft.hatchedOn && draft.hatchedOn > today) errors.push({ field: 'hatchedOn', message: 'This day has not come yet.' });
-  if (draft.statusSince && draft.statusSince > today) errors.push({ field: 'statusSince', message: 'This day has not come yet.' });
-  if (draft.tubId && !(await findTub(tx, draft.tubId))) errors.push({ field: 'tubId', message: 'There is no such tub here.' });
+  if (draft.hatchedOn && draft.hatchedOn > today)
+    errors.push({ field: 'hatchedOn', message: 'This day has not come yet.' });
+  if (draft.statusSince && draft.statusSince > today)
+    errors.push({ field: 'statusSince', message: 'This day has not come yet.' });
+  if (draft.tubId && !(await findTub(tx, draft.tubId)))
+    errors.push({ field: 'tubId', message: 'There is no such tub here.' });
 
-  const named = [draft.sireId, draft.damId, ...draft.possibleSires.map(({ animalId }) => animalId)].filter((id) => id !== null);
+  const named = [draft.sireId, draft.damId, ...draft.possibleSires.map(({ animalId }) => animalId)].filter(
+    (id) => id !== null,
+  );
   const keptHere = named.filter((id) => kept.has(id));
   const found = new Map(
     [
       ...(await findAnimals(tx, { everything: true }, keptHere)),
-      ...(await findAnimals(tx, sees, named.filter((id) => !kept.has(id)))),
+      ...(await findAnimals(
+        tx,
+        sees,
+        named.filter((id) => !kept.has(id)),
+      )),
     ].map((row) => [row.id, row]),
   );
   const look = (id: AnimalId | null, field: string): AnimalFacts | null => {
@@ -46,8 +60,12 @@ export async function checkDraft(world: WorkspaceWorld, draft: DraftAnimal, spec
   };
   const sire = look(draft.sireId, 'sireId');
   const dam = look(draft.damId, 'damId');
-  const possibleSires = draft.possibleSires.map(({ animalId }, index) => look(animalId, `possibleSires.${index}.animalId`));
-  errors.push(...checkParents(draft, { sire, dam, possibleSires: possibleSires.filter((row) => row !== null) }));
+  const possibleSires = draft.possibleSires.map(({ animalId }, index) =>
+    look(animalId, `possibleSires.${index}.animalId`),
+  );
+  errors.push(
+    ...checkParents(draft, { sire, dam, possibleSires: possibleSires.filter((row) => row !== null) }),
+  );
 
   const parents = [
     { field: 'sireId', facts: sire },
@@ -57,7 +75,10 @@ export async function checkDraft(world: WorkspaceWorld, draft: DraftAnimal, spec
   for (const { field, facts } of parents) {
     if (!facts || facts.id === draft.id || errors.some((error) => error.field === field)) continue;
     if ((await ancestorIds(tx, [facts.id])).has(draft.id)) {
-      errors.push({ field, message: `${facts.code} descends from ${draft.code}: an animal can't be its own ancestor.` });
+      errors.push({
+        field,
+        message: `${facts.code} descends from ${draft.code}: an animal can't be its own ancestor.`,
+      });
     }
   }
   errors.push(...checkClaims(species, draft, draft.loci));

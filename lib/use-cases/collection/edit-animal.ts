@@ -29,23 +29,49 @@ export const editAnimalUseCase = workspaceUseCase(editAnimal, async (world, { pa
   const species = await findSpecies(tx, fields.speciesId ?? animal.speciesId);
   if (!species) throw invalid('speciesId', 'There is no such species here.');
 
-  const sires = (await listPossibleSires(tx, animal.id)).map(({ sireId, weight }) => ({ animalId: sireId, weight }));
+  const sires = (await listPossibleSires(tx, animal.id)).map(({ sireId, weight }) => ({
+    animalId: sireId,
+    weight,
+  }));
   const claims = (await listClaims(tx, animal.id)).map(({ locusId, claim }) => ({ locusId, ...claim }));
   const draft = { ...animal, ...fields, possibleSires: possibleSires ?? sires, loci: loci ?? claims };
-  const kept = new Set<AnimalId>([animal.sireId, animal.damId, ...sires.map(({ animalId }) => animalId)].filter((id) => id !== null));
+  const kept = new Set<AnimalId>(
+    [animal.sireId, animal.damId, ...sires.map(({ animalId }) => animalId)].filter((id) => id !== null),
+  );
   const errors = await checkDraft(world, draft, await loadBeliefs(tx, species.id), kept);
   if (fields.code && (await isCodeTaken(tx, fields.code, animal.id))) {
     errors.push({ field: 'code', message: `Another animal already has the code ${fields.code}.` });
   }
   // The young are asked whoever may see them: what is impossible stays impossible.
   const young = await listYoungOf(tx, { everything: true }, animal.id);
-  errors.push(...checkAsParent(draft, young.map((child) => ({ child, as: child.damId === animal.id ? ('dam' as const) : ('sire' as const) }))));
-  if (errors.length) throw new Refusal('invalid', errors[0]?.message ?? 'Something is not right.', { errors });
+  errors.push(
+    ...checkAsParent(
+      draft,
+      young.map((child) => ({ child, as: child.damId === animal.id ? ('dam' as const) : ('sire' as const) })),
+    ),
+  );
+  if (errors.length)
+    throw new Refusal('invalid', errors[0]?.message ?? 'Something is not right.', { errors });
 
-  const since = fields.status && fields.status !== animal.status && fields.statusSince === undefined ? { statusSince: today } : {};
-  if (!(await updateAnimal(tx, animal.id, version, { ...fields, ...since }))) throw stale('animal', version + 1);
-  if (possibleSires) await replacePossibleSires(tx, { workspaceId: workspace.id, id: animal.id }, possibleSires);
-  if (loci) await replaceClaims(tx, { workspaceId: workspace.id, id: animal.id }, loci.map(({ locusId, ...claim }) => ({ locusId, claim })), today);
-  await recordAudit(world, { action: 'animal.edit', subject: { kind: 'animal', id: animal.id }, detail: { code: draft.code, changed: { ...fields, loci, possibleSires } } });
+  const since =
+    fields.status && fields.status !== animal.status && fields.statusSince === undefined
+      ? { statusSince: today }
+      : {};
+  if (!(await updateAnimal(tx, animal.id, version, { ...fields, ...since })))
+    throw stale('animal', version + 1);
+  if (possibleSires)
+    await replacePossibleSires(tx, { workspaceId: workspace.id, id: animal.id }, possibleSires);
+  if (loci)
+    await replaceClaims(
+      tx,
+      { workspaceId: workspace.id, id: animal.id },
+      loci.map(({ locusId, ...claim }) => ({ locusId, claim })),
+      today,
+    );
+  await recordAudit(world, {
+    action: 'animal.edit',
+    subject: { kind: 'animal', id: animal.id },
+    detail: { code: draft.code, changed: { ...fields, loci, possibleSires } },
+  });
   return { version: version + 1 };
 });

@@ -23,9 +23,15 @@ export const editLocusUseCase = workspaceUseCase(editLocus, async (world, { para
     const claim = claims.get(animal.id);
     const changed = { sexSystem: species.sexSystem, loci: [{ id: locus.id, name: body.name, definition }] };
     const [misfit] = claim ? checkClaims(changed, animal, [{ locusId: locus.id, ...claim }]) : [];
-    if (misfit) throw invalid('definition', `What is recorded of an animal would no longer fit. ${misfit.message}`);
+    if (misfit)
+      throw invalid('definition', `What is recorded of an animal would no longer fit. ${misfit.message}`);
   }
-  if (!(await updateLocus(tx, locus.id, body.version, { name: body.name, definition }))) throw stale('locus', body.version + 1);
-  await recordAudit(world, { action: 'locus.edit', subject: { kind: 'locus', id: locus.id }, detail: { name: body.name, before: locus.definition, after: definition } });
+  if (!(await updateLocus(tx, locus.id, body.version, { name: body.name, definition })))
+    throw stale('locus', body.version + 1);
+  await recordAudit(world, {
+    action: 'locus.edit',
+    subject: { kind: 'locus', id: locus.id },
+    detail: { name: body.name, before: locus.definition, after: definition },
+  });
   return { version: body.version + 1 };
 });

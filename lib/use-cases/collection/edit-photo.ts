@@ -12,6 +12,10 @@ export const editPhotoUseCase = workspaceUseCase(editPhoto, async (world, { para
   const { photo, code } = found;
   if (body.caption !== undefined) await updateCaption(world.tx, photo.id, body.caption);
   if (body.first) await showPhotoFirst(world.tx, photo.animalId, photo.id);
-  await recordAudit(world, { action: 'photo.edit', subject: { kind: 'animal', id: photo.animalId }, detail: { code, photo: photo.id, ...body } });
+  await recordAudit(world, {
+    action: 'photo.edit',
+    subject: { kind: 'animal', id: photo.animalId },
+    detail: { code, photo: photo.id, ...body },
+  });
   return { done: true as const };
 });

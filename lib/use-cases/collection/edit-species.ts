@@ -14,11 +14,22 @@ export const editSpeciesUseCase = workspaceUseCase(editSpecies, async (world, { 
   const { version, ...change } = body;
   if (version !== species.version) throw stale('species', species.version);
   if (change.sexSystem && change.sexSystem !== species.sexSystem) {
-    const linked = (await listLoci(tx, species.id)).find(({ definition }) => definition.chromosome !== 'autosomal');
-    if (linked) throw invalid('sexSystem', `${linked.name} lies on the ${linked.definition.chromosome} chromosome; remove it first.`);
-    if (await hasAnimals(tx, species.id)) throw invalid('sexSystem', 'Animals of this species are recorded; how their sex is decided stays.');
+    const linked = (await listLoci(tx, species.id)).find(
+      ({ definition }) => definition.chromosome !== 'autosomal',
+    );
+    if (linked)
+      throw invalid(
+        'sexSystem',
+        `${linked.name} lies on the ${linked.definition.chromosome} chromosome; remove it first.`,
+      );
+    if (await hasAnimals(tx, species.id))
+      throw invalid('sexSystem', 'Animals of this species are recorded; how their sex is decided stays.');
   }
   if (!(await updateSpecies(tx, species.id, version, change))) throw stale('species', version + 1);
-  await recordAudit(world, { action: 'species.edit', subject: { kind: 'species', id: species.id }, detail: { name: species.name, change } });
+  await recordAudit(world, {
+    action: 'species.edit',
+    subject: { kind: 'species', id: species.id },
+    detail: { name: species.name, change },
+  });
   return { version: version + 1 };
 });

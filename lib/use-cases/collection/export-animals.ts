@@ -18,20 +18,39 @@ export const exportAnimalsUseCase = workspaceUseCase(exportAnimals, async (world
   const { tx, sees, today } = world;
   const { ids: idText, ...filter } = query;
   const ids = idText?.split(',').filter(Boolean);
-  if (ids?.some((id) => !animalId.safeParse(id).success)) throw invalid('ids', 'These are no ids of animals.');
+  if (ids?.some((id) => !animalId.safeParse(id).success))
+    throw invalid('ids', 'These are no ids of animals.');
   const found = await findAnimals(world, filter, ids as AnimalId[] | undefined);
-  const rows = new Map((await findRows(tx, sees, found.map((row) => row.id))).map((row) => [row.id, row]));
-  const parents = await findRows(tx, sees, [...rows.values()].flatMap((row) => [row.sireId, row.damId]).filter((id) => id !== null));
+  const rows = new Map(
+    (
+      await findRows(
+        tx,
+        sees,
+        found.map((row) => row.id),
+      )
+    ).map((row) => [row.id, row]),
+  );
+  const parents = await findRows(
+    tx,
+    sees,
+    [...rows.values()].flatMap((row) => [row.sireId, row.damId]).filter((id) => id !== null),
+  );
   const codes = new Map([...parents, ...rows.values()].map((row) => [row.id, row.code]));
   const names = new Map((await listPartyMarks(tx)).map(({ id, name }) => [id, name]));
   const extras = await loadRowExtras(tx, sees, [...rows.keys()]);
   const projects = groupBy(extras.projects, (row) => row.animalId);
-  const beliefs = await beliefsOf(world, found.map((row) => row.speciesId));
+  const beliefs = await beliefsOf(
+    world,
+    found.map((row) => row.speciesId),
+  );
   const claims = new Map<AnimalId, string[]>();
   for (const [speciesId, of] of beliefs) {
     const nameOf = new Map(of.loci.map(({ id, name }) => [id, name]));
     for (const row of await loadClaims(tx, speciesId)) {
-      claims.set(row.animalId, [...(claims.get(row.animalId) ?? []), claimToText(nameOf.get(row.locusId) ?? '', row.claim)]);
+      claims.set(row.animalId, [
+        ...(claims.get(row.animalId) ?? []),
+        claimToText(nameOf.get(row.locusId) ?? '', row.claim),
+      ]);
     }
   }
 
@@ -41,7 +60,12 @@ export const exportAnimalsUseCase = workspaceUseCase(exportAnimals, async (world
     if (!row) continue;
     const held = (await listOwnership(tx, id)).find((set) => set.untilDay === null);
     const possible = await listPossibleSires(tx, id);
-    for (const sire of await findRows(tx, sees, possible.map(({ sireId }) => sireId))) codes.set(sire.id, sire.code);
+    for (const sire of await findRows(
+      tx,
+      sees,
+      possible.map(({ sireId }) => sireId),
+    ))
+      codes.set(sire.id, sire.code);
     const cells: Record<ImportField, string> = {
       code: row.code,
       name: row.name,
@@ -55,16 +79,29 @@ export const exportAnimalsUseCase = workspaceUseCase(exportAnimals, async (world
       'held back': row.heldBack ? 'yes' : '',
       sire: (row.sireId && codes.get(row.sireId)) ?? '',
       dam: (row.damId && codes.get(row.damId)) ?? '',
-      'possible sires': possible.filter(({ sireId }) => codes.has(sireId)).map(({ sireId, weight }) => `${codes.get(sireId)} ${weight}`).join('; '),
+      'possible sires': possible
+        .filter(({ sireId }) => codes.has(sireId))
+        .map(({ sireId, weight }) => `${codes.get(sireId)} ${weight}`)
+        .join('; '),
       loci: (claims.get(id) ?? []).sort().join(' | '),
-      owners: (held?.parts ?? []).map(({ partyId, parts }) => `${names.get(partyId) ?? ''} ${parts}`).sort().join('; '),
+      owners: (held?.parts ?? [])
+        .map(({ partyId, parts }) => `${names.get(partyId) ?? ''} ${parts}`)
+        .sort()
+        .join('; '),
       'owned from': held?.fromDay ?? '',
       place: tubLabel ?? '',
-      weights: (await listWeights(tx, id)).map(({ weighedOn, grams }) => `${weighedOn} ${grams}`).sort().join('; '),
+      weights: (await listWeights(tx, id))
+        .map(({ weighedOn, grams }) => `${weighedOn} ${grams}`)
+        .sort()
+        .join('; '),
       projects: (projects.get(id) ?? []).map(({ name }) => name).join('; '),
       notes: row.notes,
     };
     lines.push(importFields.map((field) => cells[field]));
   }
-  return { body: writeCsv(importFields, lines), contentType: 'text/csv; charset=utf-8', fileName: `animals-${today}.csv` };
+  return {
+    body: writeCsv(importFields, lines),
+    contentType: 'text/csv; charset=utf-8',
+    fileName: `animals-${today}.csv`,
+  };
 });

@@ -15,14 +15,26 @@ export type FoundAnimal = AnimalListRecord & { description: string };
  * Animals that are seen and match, sorted. What an animal looks like and carries is computed, so searching in it,
  * filtering by a locus and sorting by it happen here, after the database has narrowed the rest.
  */
-export async function findAnimals(world: Pick<WorkspaceWorld, 'tx' | 'sees'>, filter: AnimalFilter, ids?: readonly AnimalId[]): Promise<FoundAnimal[]> {
+export async function findAnimals(
+  world: Pick<WorkspaceWorld, 'tx' | 'sees'>,
+  filter: AnimalFilter,
+  ids?: readonly AnimalId[],
+): Promise<FoundAnimal[]> {
   const { search, locus, at, sort, ...narrow } = filter;
   const rows = await listAnimalRecords(world.tx, world.sees, { ...narrow, ids });
-  const beliefs = await beliefsOf(world, rows.map((row) => row.speciesId));
-  const described = rows.map((row) => ({ ...row, description: beliefs.get(row.speciesId)?.describe(row.id) ?? '' }));
+  const beliefs = await beliefsOf(
+    world,
+    rows.map((row) => row.speciesId),
+  );
+  const described = rows.map((row) => ({
+    ...row,
+    description: beliefs.get(row.speciesId)?.describe(row.id) ?? '',
+  }));
   const words = (search ?? '').toLowerCase().split(/\s+/).filter(Boolean);
   return described
-    .filter((row) => words.every((word) => `${row.code} ${row.name} ${row.description}`.toLowerCase().includes(word)))
+    .filter((row) =>
+      words.every((word) => `${row.code} ${row.name} ${row.description}`.toLowerCase().includes(word)),
+    )
     .filter((row) => {
       if (!locus) return true;
       const of = beliefs.get(row.speciesId);
@@ -32,7 +44,10 @@ export async function findAnimals(world: Pick<WorkspaceWorld, 'tx' | 'sees'>, fi
     .sort(byColumn(sort));
 }
 
-export async function beliefsOf({ tx }: Pick<WorkspaceWorld, 'tx'>, speciesIds: readonly SpeciesId[]): Promise<Map<SpeciesId, SpeciesBeliefs>> {
+export async function beliefsOf(
+  { tx }: Pick<WorkspaceWorld, 'tx'>,
+  speciesIds: readonly SpeciesId[],
+): Promise<Map<SpeciesId, SpeciesBeliefs>> {
   const beliefs = new Map<SpeciesId, SpeciesBeliefs>();
   for (const id of new Set(speciesIds)) beliefs.set(id, await loadBeliefs(tx, id));
   return beliefs;
@@ -73,7 +88,8 @@ function byColumn(sort: AnimalFilter['sort']) {
   return (a: FoundAnimal, b: FoundAnimal): number => {
     const [x, y] = [value(a), value(b)];
     if (x === null || y === null) return x === y ? inOrder.compare(a.code, b.code) : x === null ? 1 : -1;
-    const order = typeof x === 'number' && typeof y === 'number' ? x - y : inOrder.compare(String(x), String(y));
+    const order =
+      typeof x === 'number' && typeof y === 'number' ? x - y : inOrder.compare(String(x), String(y));
     return (falls ? -order : order) || inOrder.compare(a.code, b.code);
   };
 }

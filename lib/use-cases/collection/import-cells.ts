@@ -1,4 +1,10 @@
-import { animalOrigin, animalStatus, type AnimalOrigin, type AnimalStatus, type Sex } from '@/lib/contracts/animal';
+import {
+  animalOrigin,
+  animalStatus,
+  type AnimalOrigin,
+  type AnimalStatus,
+  type Sex,
+} from '@/lib/contracts/animal';
 import type { HatchedPrecision } from '@/lib/contracts/animal-list';
 
 /** What can't be read is said with the words for it. */
@@ -6,7 +12,21 @@ export class UnreadableCell extends Error {
   override name = 'UnreadableCell';
 }
 
-const sexes: Record<string, Sex> = { male: 'male', m: 'male', '1.0': 'male', '♂': 'male', female: 'female', f: 'female', '0.1': 'female', '♀': 'female', unknown: 'unknown', u: 'unknown', '?': 'unknown', '0.0.1': 'unknown', '': 'unknown' };
+const sexes: Record<string, Sex> = {
+  male: 'male',
+  m: 'male',
+  '1.0': 'male',
+  '♂': 'male',
+  female: 'female',
+  f: 'female',
+  '0.1': 'female',
+  '♀': 'female',
+  unknown: 'unknown',
+  u: 'unknown',
+  '?': 'unknown',
+  '0.0.1': 'unknown',
+  '': 'unknown',
+};
 
 export function readSex(cell: string): Sex {
   const sex = sexes[cell.toLowerCase()];
@@ -22,7 +42,14 @@ export function readSexedBy(cell: string): (typeof sexings)[number] | null {
   return found;
 }
 
-const origins: Record<string, AnimalOrigin> = { cb: 'captive_bred', cbb: 'captive_bred', 'captive bred': 'captive_bred', wc: 'wild_caught', 'wild caught': 'wild_caught', '': 'unknown' };
+const origins: Record<string, AnimalOrigin> = {
+  cb: 'captive_bred',
+  cbb: 'captive_bred',
+  'captive bred': 'captive_bred',
+  wc: 'wild_caught',
+  'wild caught': 'wild_caught',
+  '': 'unknown',
+};
 export function readOrigin(cell: string): AnimalOrigin {
   const plain = cell.toLowerCase().replace(/[_-]/g, ' ');
   const found = origins[plain] ?? animalOrigin.options.find((name) => name.replace('_', ' ') === plain);
@@ -34,14 +61,20 @@ export function readStatus(cell: string): AnimalStatus {
   const plain = cell.toLowerCase().replace(/[\s-]/g, '_');
   if (!plain) return 'here';
   const found = animalStatus.options.find((name) => name === plain);
-  if (!found) throw new UnreadableCell(`"${cell}" is no status; write one of ${animalStatus.options.map((name) => name.replaceAll('_', ' ')).join(', ')}.`);
+  if (!found)
+    throw new UnreadableCell(
+      `"${cell}" is no status; write one of ${animalStatus.options.map((name) => name.replaceAll('_', ' ')).join(', ')}.`,
+    );
   return found;
 }
 
 /** An ISO day that exists in the calendar. */
 export function readDay(cell: string): string | null {
   if (!cell) return null;
-  if (!/^\d{4}-\d{2}-\d{2}$/.test(cell) || new Date(`${cell}T00:00:00Z`).toISOString().slice(0, 10) !== cell) {
+  if (
+    !/^\d{4}-\d{2}-\d{2}$/.test(cell) ||
+    new Date(`${cell}T00:00:00Z`).toISOString().slice(0, 10) !== cell
+  ) {
     throw new UnreadableCell(`"${cell}" is no day; write it as 2024-07-31.`);
   }
   return cell;
@@ -88,7 +121,8 @@ export function readWeights(cell: string, today: string): { weighedOn: string; g
     .map((piece) => {
       const found = /^(?:(\d{4}-\d{2}-\d{2})\s+)?(\d{1,6})(?:\s*g)?$/.exec(piece);
       const grams = Number(found?.[2]);
-      if (!found || grams < 1) throw new UnreadableCell(`"${piece}" is no weight; write 1200, or 2024-05-01 1200.`);
+      if (!found || grams < 1)
+        throw new UnreadableCell(`"${piece}" is no weight; write 1200, or 2024-05-01 1200.`);
       const weighedOn = readDay(found[1] ?? '') ?? today;
       if (weighedOn > today) throw new UnreadableCell(`"${piece}": this day has not come yet.`);
       return { weighedOn, grams };

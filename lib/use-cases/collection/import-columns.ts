@@ -28,8 +28,13 @@ const otherHeads: Record<ImportField, readonly string[]> = {
 export function guessColumns(head: readonly string[]): (ImportField | null)[] {
   const taken = new Set<ImportField>();
   return head.map((text) => {
-    const plain = text.toLowerCase().replace(/[_\s]+/g, ' ').trim();
-    const field = importFields.find((name) => !taken.has(name) && (name === plain || otherHeads[name].includes(plain)));
+    const plain = text
+      .toLowerCase()
+      .replace(/[_\s]+/g, ' ')
+      .trim();
+    const field = importFields.find(
+      (name) => !taken.has(name) && (name === plain || otherHeads[name].includes(plain)),
+    );
     if (!field) return null;
     taken.add(field);
     return field;

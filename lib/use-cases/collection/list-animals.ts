@@ -11,7 +11,11 @@ export const listAnimalsUseCase = workspaceUseCase(listAnimals, async (world, { 
   const { offset, limit, ...filter } = query;
   const found = await findAnimals(world, filter);
   const page = found.slice(offset, offset + limit);
-  const extras = await loadRowExtras(tx, sees, page.map((row) => row.id));
+  const extras = await loadRowExtras(
+    tx,
+    sees,
+    page.map((row) => row.id),
+  );
   const parts = groupBy(extras.parts, (row) => row.animalId);
   const projects = groupBy(extras.projects, (row) => row.animalId);
   const photos = new Map(extras.photos.map((row) => [row.animalId, row.id]));

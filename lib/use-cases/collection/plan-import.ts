@@ -51,14 +51,21 @@ export interface ImportPlan {
 
 const MOST_ROWS = 5000;
 const fieldNames: Record<string, string> = { sireId: 'sire', damId: 'dam', hatchedOn: 'hatched' };
-const inFile = (field: string) => fieldNames[field] ?? (field.startsWith('possibleSires') ? 'possible sires' : field.startsWith('loci') ? 'loci' : field);
+const inFile = (field: string) =>
+  fieldNames[field] ??
+  (field.startsWith('possibleSires') ? 'possible sires' : field.startsWith('loci') ? 'loci' : field);
 
 /** Reads a file of animals and checks every row as the form would, against the collection and the other rows; saves nothing. */
-export async function planImport(world: WorkspaceWorld, body: { csv: string; columns?: (ImportField | null)[] }): Promise<ImportPlan> {
+export async function planImport(
+  world: WorkspaceWorld,
+  body: { csv: string; columns?: (ImportField | null)[] },
+): Promise<ImportPlan> {
   const [head, ...lines] = readCsv(body.csv);
   if (!head || lines.length === 0) throw invalid('csv', 'The file has a head and at least one row below it.');
-  if (lines.length > MOST_ROWS) throw invalid('csv', `The file has ${lines.length} rows; take at most ${MOST_ROWS} at once.`);
-  if (body.columns && body.columns.length !== head.length) throw invalid('columns', `The file has ${head.length} columns.`);
+  if (lines.length > MOST_ROWS)
+    throw invalid('csv', `The file has ${lines.length} rows; take at most ${MOST_ROWS} at once.`);
+  if (body.columns && body.columns.length !== head.length)
+    throw invalid('columns', `The file has ${head.length} columns.`);
   const columns = body.columns ?? guessColumns(head);
   const chosen = columns.filter((field) => field !== null);
   const twice = chosen.find((field, index) => chosen.indexOf(field) < index);
@@ -82,7 +89,12 @@ export async function planImport(world: WorkspaceWorld, body: { csv: string; col
     if (row) linkRelatives(known, codes, row, cellsOf(line));
   });
   refuseCircles(rows);
-  const samples = head.map((_, column) => lines.map((line) => line[column] ?? '').filter(Boolean).slice(0, 3));
+  const samples = head.map((_, column) =>
+    lines
+      .map((line) => line[column] ?? '')
+      .filter(Boolean)
+      .slice(0, 3),
+  );
   return { head, columns, samples, rows };
 }
 
@@ -98,7 +110,8 @@ async function loadKnown(world: WorkspaceWorld, lines: readonly Cells[]) {
   const named = new Set<string>();
   for (const cells of lines) {
     for (const code of [cells('code'), cells('sire'), cells('dam')]) if (code) named.add(code);
-    for (const piece of cells('possible sires').split(';')) named.add(piece.trim().replace(/\s+\d+$/, '')).add(piece.trim());
+    for (const piece of cells('possible sires').split(';'))
+      named.add(piece.trim().replace(/\s+\d+$/, '')).add(piece.trim());
   }
   const there = await findAnimalsByCode(tx, sees, [...named]);
   return {
@@ -107,7 +120,9 @@ async function loadKnown(world: WorkspaceWorld, lines: readonly Cells[]) {
     animals: new Map(there.map((row) => [row.code, row])),
     parties: new Map((await listPartyMarks(tx)).map(({ id, name }) => [name.toLowerCase(), id])),
     tubs: new Map((await listTubs(tx, sees)).map(({ id, label }) => [label.toLowerCase(), id])),
-    projects: new Map((await listVisibleProjects(tx, sees)).map((project) => [project.name.toLowerCase(), project])),
+    projects: new Map(
+      (await listVisibleProjects(tx, sees)).map((project) => [project.name.toLowerCase(), project]),
+    ),
   };
 }
 
@@ -132,10 +147,18 @@ function readRow({ today, actor }: WorkspaceWorld, known: Known, cells: Cells, l
   if (cells('notes').length > 4000) fail('notes', 'A note has at most 4000 characters.');
   const wanted = cells('species').toLowerCase();
   const species = wanted
-    ? known.species.find((row) => [row.name, row.scientificName, row.codePrefix].some((name) => name.toLowerCase() === wanted))
-    : known.species.length === 1 ? known.species[0] : undefined;
-  if (!species) fail('species', wanted ? `There is no species "${cells('species')}" here.` : 'Say which species it is.');
-  const hatched = attempt('hatched', () => read.readHatched(cells('hatched')), { hatchedOn: null, hatchedPrecision: 'day' as const });
+    ? known.species.find((row) =>
+        [row.name, row.scientificName, row.codePrefix].some((name) => name.toLowerCase() === wanted),
+      )
+    : known.species.length === 1
+      ? known.species[0]
+      : undefined;
+  if (!species)
+    fail('species', wanted ? `There is no species "${cells('species')}" here.` : 'Say which species it is.');
+  const hatched = attempt('hatched', () => read.readHatched(cells('hatched')), {
+    hatchedOn: null,
+    hatchedPrecision: 'day' as const,
+  });
   if (hatched.hatchedOn && hatched.hatchedOn > today) fail('hatched', 'This day has not come yet.');
   const status = attempt('status', () => read.readStatus(cells('status')), 'here' as const);
   const tub = cells('place') ? known.tubs.get(cells('place').toLowerCase()) : null;
@@ -146,17 +169,23 @@ function readRow({ today, actor }: WorkspaceWorld, known: Known, cells: Cells, l
     if (!partyId) fail('owners', `There is no party "${name}" here.`);
     return partyId ? [{ partyId, parts: count }] : [];
   });
-  if (new Set(owners.map(({ partyId }) => partyId)).size < owners.length) fail('owners', 'A party is named twice.');
+  if (new Set(owners.map(({ partyId }) => partyId)).size < owners.length)
+    fail('owners', 'A party is named twice.');
   if (!cells('owners') && actor.partyId) owners.push({ partyId: actor.partyId, parts: 1 });
   else if (!cells('owners')) fail('owners', 'Say who owns it.');
   const ownedFrom = attempt('owned from', () => read.readDay(cells('owned from')), null);
   if (ownedFrom && ownedFrom > today) fail('owned from', 'This day has not come yet.');
-  const projectIds = cells('projects').split(';').map((name) => name.trim()).filter(Boolean).flatMap((name) => {
-    const project = known.projects.get(name.toLowerCase());
-    if (!project) fail('projects', `There is no project "${name}" here.`);
-    else if (species && project.speciesId !== species.id) fail('projects', `${project.name} is a project of another species.`);
-    return project ? [project.id] : [];
-  });
+  const projectIds = cells('projects')
+    .split(';')
+    .map((name) => name.trim())
+    .filter(Boolean)
+    .flatMap((name) => {
+      const project = known.projects.get(name.toLowerCase());
+      if (!project) fail('projects', `There is no project "${name}" here.`);
+      else if (species && project.speciesId !== species.id)
+        fail('projects', `${project.name} is a project of another species.`);
+      return project ? [project.id] : [];
+    });
 
   const animal: PlannedAnimal = {
     id: crypto.randomUUID() as AnimalId,
@@ -186,10 +215,18 @@ function readRow({ today, actor }: WorkspaceWorld, known: Known, cells: Cells, l
   return { line, errors, animal };
 }
 
-function readLoci(beliefs: SpeciesBeliefs, animal: PlannedAnimal, cell: string, fail: (field: 'loci', message: string) => void): void {
+function readLoci(
+  beliefs: SpeciesBeliefs,
+  animal: PlannedAnimal,
+  cell: string,
+  fail: (field: 'loci', message: string) => void,
+): void {
   const found = claimsFromText(cell);
   if ('unreadable' in found) {
-    fail('loci', `"${found.unreadable}" can't be read; write "Locus: looks Phenotype, carries a/b = 2/3", with | between loci.`);
+    fail(
+      'loci',
+      `"${found.unreadable}" can't be read; write "Locus: looks Phenotype, carries a/b = 2/3", with | between loci.`,
+    );
     return;
   }
   for (const { locus, claim } of found.claims) {
@@ -201,28 +238,45 @@ function readLoci(beliefs: SpeciesBeliefs, animal: PlannedAnimal, cell: string, 
 }
 
 /** Sire, dam and possible sires by code: a row of the file, or an animal that is there already. */
-function linkRelatives(known: Known, codes: ReadonlyMap<string, PlannedRow>, row: PlannedRow, cells: Cells): void {
+function linkRelatives(
+  known: Known,
+  codes: ReadonlyMap<string, PlannedRow>,
+  row: PlannedRow,
+  cells: Cells,
+): void {
   const look = (field: ImportField, code: string): AnimalFacts | null => {
     if (!code) return null;
     const facts = codes.get(code)?.animal ?? known.animals.get(code) ?? null;
-    if (!facts) row.errors.push({ field, message: `There is no animal ${code}, neither in the file nor in the collection.` });
+    if (!facts)
+      row.errors.push({
+        field,
+        message: `There is no animal ${code}, neither in the file nor in the collection.`,
+      });
     return facts;
   };
   const sire = look('sire', cells('sire'));
   const dam = look('dam', cells('dam'));
-  const possible = cells('possible sires').split(';').map((piece) => piece.trim()).filter(Boolean).flatMap((piece) => {
-    // A code may itself end in a number after a space; the whole text is tried first.
-    const isWhole = codes.has(piece) || known.animals.has(piece);
-    const found = isWhole ? null : /^(.*\S)\s+(\d{1,4})$/.exec(piece);
-    const facts = look('possible sires', found?.[1] ?? piece);
-    return facts ? [{ facts, weight: Math.max(1, Number(found?.[2] ?? 1)) }] : [];
-  });
+  const possible = cells('possible sires')
+    .split(';')
+    .map((piece) => piece.trim())
+    .filter(Boolean)
+    .flatMap((piece) => {
+      // A code may itself end in a number after a space; the whole text is tried first.
+      const isWhole = codes.has(piece) || known.animals.has(piece);
+      const found = isWhole ? null : /^(.*\S)\s+(\d{1,4})$/.exec(piece);
+      const facts = look('possible sires', found?.[1] ?? piece);
+      return facts ? [{ facts, weight: Math.max(1, Number(found?.[2] ?? 1)) }] : [];
+    });
   const { animal } = row;
   animal.sireId = sire?.id ?? null;
   animal.damId = dam?.id ?? null;
   animal.possibleSires = possible.map(({ facts, weight }) => ({ animalId: facts.id, weight }));
   if (!animal.speciesId) return;
-  for (const { field, message } of checkParents(animal, { sire, dam, possibleSires: possible.map(({ facts }) => facts) })) {
+  for (const { field, message } of checkParents(animal, {
+    sire,
+    dam,
+    possibleSires: possible.map(({ facts }) => facts),
+  })) {
     row.errors.push({ field: inFile(field), message });
   }
 }
@@ -238,7 +292,10 @@ function refuseCircles(rows: readonly PlannedRow[]): void {
       const above = byId.get(parent);
       if (!above) continue;
       if (state.get(parent) === 'open') {
-        row.errors.push({ field: 'sire', message: `${row.animal.code} and ${above.animal.code} descend from each other: an animal can't be its own ancestor.` });
+        row.errors.push({
+          field: 'sire',
+          message: `${row.animal.code} and ${above.animal.code} descend from each other: an animal can't be its own ancestor.`,
+        });
       } else visit(above);
     }
     state.set(row.animal.id, 'done');
@@ -247,5 +304,7 @@ function refuseCircles(rows: readonly PlannedRow[]): void {
 }
 
 export function parentsIn({ animal }: PlannedRow): AnimalId[] {
-  return [animal.sireId, animal.damId, ...animal.possibleSires.map(({ animalId }) => animalId)].filter((id) => id !== null);
+  return [animal.sireId, animal.damId, ...animal.possibleSires.map(({ animalId }) => animalId)].filter(
+    (id) => id !== null,
+  );
 }

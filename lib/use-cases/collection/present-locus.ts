@@ -14,7 +14,12 @@ export function presentLocus(
     genotypesOf(row.definition, sex, system)
       .filter((genotype) => !row.definition.lethal.includes(genotype))
       .map((genotype) => describeGenotype(row.definition, genotype));
-  const definition = { ...kept, alleles: kept.alleles.map((allele) => ({ ...allele })), phenotypes: { ...kept.phenotypes }, lethal: [...kept.lethal] };
+  const definition = {
+    ...kept,
+    alleles: kept.alleles.map((allele) => ({ ...allele })),
+    phenotypes: { ...kept.phenotypes },
+    lethal: [...kept.lethal],
+  };
   return {
     id,
     name,
@@ -22,7 +27,9 @@ export function presentLocus(
     recorded,
     definition: {
       ...definition,
-      penetrance: Object.fromEntries(Object.entries(kept.penetrance).map(([genotype, chances]) => [genotype, { ...chances }])),
+      penetrance: Object.fromEntries(
+        Object.entries(kept.penetrance).map(([genotype, chances]) => [genotype, { ...chances }]),
+      ),
       welfare: kept.welfare.map((note) => ({ ...note, genotypes: [...note.genotypes] })),
     },
     genotypes: { male: genotypes('male'), female: genotypes('female'), unknown: genotypes('unknown') },
@@ -32,8 +39,12 @@ export function presentLocus(
 function describeGenotype(locus: LocusDefinition, genotype: string): LocusEntry['genotypes']['male'][number] {
   const wild = locus.alleles[0]?.symbol;
   const mutants = allelesOf(genotype).filter((symbol) => symbol !== wild);
-  const likeliest = [...phenotypeChances(locus, genotype)].reduce((best, next) => (next[1].gt(best[1]) ? next : best));
-  const names = mutants.map((symbol) => locus.alleles.find((allele) => allele.symbol === symbol)?.name ?? symbol);
+  const likeliest = [...phenotypeChances(locus, genotype)].reduce((best, next) =>
+    next[1].gt(best[1]) ? next : best,
+  );
+  const names = mutants.map(
+    (symbol) => locus.alleles.find((allele) => allele.symbol === symbol)?.name ?? symbol,
+  );
   const [first = '', second] = names;
   const words =
     names.length === 0

@@ -13,20 +13,28 @@ import type { WorkspaceWorld } from '../world';
 export async function presentOwnership({ tx, sees, actor }: WorkspaceWorld, animalId: AnimalId) {
   const sets = await listOwnership(tx, animalId);
   const marks = await listPartyMarks(tx);
-  const maySeePrices = reachOf(actor.role, 'ownership.transfer') !== 'no' || reachOf(actor.role, 'ledger.see') !== 'no';
-  const isParty = (set: { parts: { partyId: PartyId }[] } | undefined) => set?.parts.some(({ partyId }) => partyId === actor.partyId) ?? false;
+  const maySeePrices =
+    reachOf(actor.role, 'ownership.transfer') !== 'no' || reachOf(actor.role, 'ledger.see') !== 'no';
+  const isParty = (set: { parts: { partyId: PartyId }[] } | undefined) =>
+    set?.parts.some(({ partyId }) => partyId === actor.partyId) ?? false;
   const named = new Set<PartyId>(
     sees.everything
       ? marks.map(({ id }) => id)
       : [
-          ...(await listProjectsWithParties(tx, sees)).flatMap((project) => project.parties.map(({ partyId }) => partyId)),
-          ...sets.filter((set) => set.untilDay === null).flatMap((set) => set.parts.map(({ partyId }) => partyId)),
+          ...(await listProjectsWithParties(tx, sees)).flatMap((project) =>
+            project.parties.map(({ partyId }) => partyId),
+          ),
+          ...sets
+            .filter((set) => set.untilDay === null)
+            .flatMap((set) => set.parts.map(({ partyId }) => partyId)),
           ...marks.filter(({ id, kind }) => kind === 'house' || id === actor.partyId).map(({ id }) => id),
         ],
   );
   const mentioned = new Set(sets.flatMap((set) => set.parts.map(({ partyId }) => partyId)));
   return {
-    parties: marks.filter(({ id }) => mentioned.has(id)).map((party) => (named.has(party.id) ? party : { ...party, name: 'An earlier owner' })),
+    parties: marks
+      .filter(({ id }) => mentioned.has(id))
+      .map((party) => (named.has(party.id) ? party : { ...party, name: 'An earlier owner' })),
     ownership: sets.map((set, index) => {
       const seesPrice = maySeePrices && (sees.everything || isParty(set) || isParty(sets[index + 1]));
       return {

@@ -10,13 +10,25 @@ export const previewImportUseCase = workspaceUseCase(previewImport, async (world
     head,
     columns,
     samples,
-    rows: rows.map(({ line, errors, animal }) => ({ line, code: animal.code, summary: summarise(animal), errors })),
+    rows: rows.map(({ line, errors, animal }) => ({
+      line,
+      code: animal.code,
+      summary: summarise(animal),
+      errors,
+    })),
     errors: rows.reduce((sum, row) => sum + row.errors.length, 0),
   };
 });
 
 function summarise(animal: PlannedAnimal): string {
-  const parts = [animal.name, animal.sex, animal.hatchedOn?.slice(0, animal.hatchedPrecision === 'year' ? 4 : animal.hatchedPrecision === 'month' ? 7 : 10)];
+  const parts = [
+    animal.name,
+    animal.sex,
+    animal.hatchedOn?.slice(
+      0,
+      animal.hatchedPrecision === 'year' ? 4 : animal.hatchedPrecision === 'month' ? 7 : 10,
+    ),
+  ];
   const looks = animal.loci.map(({ shows }) => shows).filter(Boolean);
   const parents = animal.sireId || animal.damId || animal.possibleSires.length ? 'with parents' : '';
   return [...parts, looks.join(' '), parents].filter(Boolean).join(' · ');

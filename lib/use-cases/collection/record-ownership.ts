@@ -28,7 +28,10 @@ export const recordOwnershipUseCase = workspaceUseCase(recordOwnership, async (w
   if (!animal) throw notFound('animal');
   const inForce = await lockOwnershipInForce(tx, animal.id);
   if ((inForce?.id ?? null) !== body.seen) {
-    throw new Refusal('stale', `Somebody recorded other owners of ${animal.code} in the meantime. Nothing of yours was saved; look at the parts as they are now and try again.`);
+    throw new Refusal(
+      'stale',
+      `Somebody recorded other owners of ${animal.code} in the meantime. Nothing of yours was saved; look at the parts as they are now and try again.`,
+    );
   }
 
   const errors: FieldError[] = await checkParts(world, 'parts', body.parts);
@@ -37,20 +40,40 @@ export const recordOwnershipUseCase = workspaceUseCase(recordOwnership, async (w
     errors.push({ field: 'fromDay', message: `${animal.code} hatched on ${animal.hatchedOn}.` });
   }
   if (inForce && body.fromDay < inForce.fromDay) {
-    errors.push({ field: 'fromDay', message: `The present parts hold since ${inForce.fromDay}; a change comes after them.` });
+    errors.push({
+      field: 'fromDay',
+      message: `The present parts hold since ${inForce.fromDay}; a change comes after them.`,
+    });
   }
   if (inForce && body.fromDay === inForce.fromDay && body.reason !== 'correction') {
-    errors.push({ field: 'fromDay', message: `The present parts were recorded for the same day. Choose "correction" to replace them.` });
+    errors.push({
+      field: 'fromDay',
+      message: `The present parts were recorded for the same day. Choose "correction" to replace them.`,
+    });
   }
   if (body.reason === 'gift' && body.price) errors.push({ field: 'price', message: 'A gift has no price.' });
-  if (!sees.everything && inForce?.parts.some(({ partyId }) => partyId !== actor.partyId && loses(partyId, inForce.parts, body.parts))) {
-    errors.push({ field: 'parts', message: 'You can give away only parts of your own; this would take some from another partner.' });
+  if (
+    !sees.everything &&
+    inForce?.parts.some(
+      ({ partyId }) => partyId !== actor.partyId && loses(partyId, inForce.parts, body.parts),
+    )
+  ) {
+    errors.push({
+      field: 'parts',
+      message: 'You can give away only parts of your own; this would take some from another partner.',
+    });
   }
-  if (errors.length) throw new Refusal('invalid', errors[0]?.message ?? 'Something is not right.', { errors });
+  if (errors.length)
+    throw new Refusal('invalid', errors[0]?.message ?? 'Something is not right.', { errors });
 
   if (inForce) await endOwnership(tx, inForce.id, body.fromDay);
   const { parts, fromDay, reason, price, note } = body;
-  const id = await insertOwnership(tx, workspace, { animalId: animal.id, fromDay, reason, price, note, recordedBy: actor.memberId }, parts);
+  const id = await insertOwnership(
+    tx,
+    workspace,
+    { animalId: animal.id, fromDay, reason, price, note, recordedBy: actor.memberId },
+    parts,
+  );
   await recordAudit(world, {
     action: 'ownership.record',
     subject: { kind: 'animal', id: animal.id },
@@ -58,6 +81,11 @@ export const recordOwnershipUseCase = workspaceUseCase(recordOwnership, async (w
     reason: note,
   });
   const concerned = [...new Set([...parts, ...(inForce?.parts ?? [])].map(({ partyId }) => partyId))];
-  await notifyParties(world, concerned, { kind: 'ownership', title: `The owners of ${animal.code} changed`, href: `collection/${animal.id}` }, actor.memberId);
+  await notifyParties(
+    world,
+    concerned,
+    { kind: 'ownership', title: `The owners of ${animal.code} changed`, href: `collection/${animal.id}` },
+    actor.memberId,
+  );
   return { id };
 });

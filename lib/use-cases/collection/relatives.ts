@@ -16,6 +16,13 @@ export async function loadRelatives(
   return (id) => {
     const row = byId.get(id);
     if (!row) return { shown: false };
-    return { shown: true, id: row.id, code: row.code, name: row.name, sex: row.sex, description: beliefs.describe(row.id) };
+    return {
+      shown: true,
+      id: row.id,
+      code: row.code,
+      name: row.name,
+      sex: row.sex,
+      description: beliefs.describe(row.id),
+    };
   };
 }

@@ -10,6 +10,10 @@ export const removeCombinationUseCase = workspaceUseCase(removeCombination, asyn
   const combination = await findCombination(world.tx, params.combination);
   if (!combination) throw notFound('combination');
   await deleteCombination(world.tx, combination.id);
-  await recordAudit(world, { action: 'combination.remove', subject: { kind: 'combination', id: combination.id }, detail: { name: combination.name } });
+  await recordAudit(world, {
+    action: 'combination.remove',
+    subject: { kind: 'combination', id: combination.id },
+    detail: { name: combination.name },
+  });
   return { done: true as const };
 });

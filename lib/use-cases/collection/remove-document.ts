@@ -13,6 +13,10 @@ export const removeDocumentUseCase = workspaceUseCase(removeDocument, async (wor
   const { document, animalId, code } = found;
   await deleteDocument(world.tx, document.id);
   afterCommit(world.tx, () => world.services.storage.remove(document.storageKey));
-  await recordAudit(world, { action: 'document.remove', subject: { kind: 'animal', id: animalId }, detail: { code, name: document.name } });
+  await recordAudit(world, {
+    action: 'document.remove',
+    subject: { kind: 'animal', id: animalId },
+    detail: { code, name: document.name },
+  });
   return { done: true as const };
 });

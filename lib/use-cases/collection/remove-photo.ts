@@ -18,6 +18,10 @@ export const removePhotoUseCase = workspaceUseCase(removePhoto, async (world, { 
     await storage.remove(photo.storageKey);
     await storage.remove(smallKey(photo.storageKey));
   });
-  await recordAudit(world, { action: 'photo.remove', subject: { kind: 'animal', id: photo.animalId }, detail: { code, photo: photo.id } });
+  await recordAudit(world, {
+    action: 'photo.remove',
+    subject: { kind: 'animal', id: photo.animalId },
+    detail: { code, photo: photo.id },
+  });
   return { done: true as const };
 });

@@ -9,6 +9,10 @@ import { workspaceUseCase } from '../world';
 export const removeWeightUseCase = workspaceUseCase(removeWeight, async (world, { params }) => {
   const animal = await findAnimal(world.tx, world.sees, params.animal);
   if (!animal || !(await deleteWeight(world.tx, animal.id, params.weight))) throw notFound('weight');
-  await recordAudit(world, { action: 'animal.unweigh', subject: { kind: 'animal', id: animal.id }, detail: { code: animal.code, weight: params.weight } });
+  await recordAudit(world, {
+    action: 'animal.unweigh',
+    subject: { kind: 'animal', id: animal.id },
+    detail: { code: animal.code, weight: params.weight },
+  });
   return { done: true as const };
 });

@@ -34,9 +34,13 @@ export const showAnimalUseCase = workspaceUseCase(showAnimal, async (world, { pa
   const possible = await listPossibleSires(tx, animal.id);
   const young = await listYoungOf(tx, sees, animal.id);
   const seesPairings = reachOf(actor.role, 'pairing.see') !== 'no';
-  const { paired, laid } = seesPairings ? await listPairingsOf(tx, sees, animal.id) : { paired: [], laid: [] };
-  const mateOf = (pair: { sireId: typeof animal.id; damId: typeof animal.id }) => (pair.sireId === animal.id ? pair.damId : pair.sireId);
-  const sideOf = (pair: { sireId: typeof animal.id }) => (pair.sireId === animal.id ? ('sire' as const) : ('dam' as const));
+  const { paired, laid } = seesPairings
+    ? await listPairingsOf(tx, sees, animal.id)
+    : { paired: [], laid: [] };
+  const mateOf = (pair: { sireId: typeof animal.id; damId: typeof animal.id }) =>
+    pair.sireId === animal.id ? pair.damId : pair.sireId;
+  const sideOf = (pair: { sireId: typeof animal.id }) =>
+    pair.sireId === animal.id ? ('sire' as const) : ('dam' as const);
   const relative = await loadRelatives(world, beliefs, [
     animal.sireId,
     animal.damId,
@@ -49,7 +53,12 @@ export const showAnimalUseCase = workspaceUseCase(showAnimal, async (world, { pa
     id: animal.id,
     code: animal.code,
     name: animal.name,
-    species: { id: species.id, name: species.name, scientificName: species.scientificName, sexSystem: species.sexSystem },
+    species: {
+      id: species.id,
+      name: species.name,
+      scientificName: species.scientificName,
+      sexSystem: species.sexSystem,
+    },
     sex: animal.sex,
     sexedBy: animal.sexedBy,
     hatchedOn: animal.hatchedOn,
@@ -70,10 +79,24 @@ export const showAnimalUseCase = workspaceUseCase(showAnimal, async (world, { pa
     ...(await presentOwnership(world, animal.id)),
     weights: await listWeights(tx, animal.id),
     photos: await listPhotos(tx, animal.id),
-    documents: (await listDocuments(tx, animal.id)).map((row) => ({ ...row, createdAt: row.createdAt.toISOString() })),
+    documents: (await listDocuments(tx, animal.id)).map((row) => ({
+      ...row,
+      createdAt: row.createdAt.toISOString(),
+    })),
     projects: await listProjectsOf(tx, sees, animal.id),
-    pairings: paired.map((pair) => ({ id: pair.id, season: pair.season, status: pair.status, as: sideOf(pair), mate: relative(mateOf(pair)) })),
-    clutches: laid.map((clutch) => ({ id: clutch.id, code: clutch.code, laidOn: clutch.laidOn, as: sideOf(clutch) })),
+    pairings: paired.map((pair) => ({
+      id: pair.id,
+      season: pair.season,
+      status: pair.status,
+      as: sideOf(pair),
+      mate: relative(mateOf(pair)),
+    })),
+    clutches: laid.map((clutch) => ({
+      id: clutch.id,
+      code: clutch.code,
+      laidOn: clutch.laidOn,
+      as: sideOf(clutch),
+    })),
     hatchedFrom: animal.clutchId && seesPairings ? await findClutchCode(tx, sees, animal.clutchId) : null,
   };
 });

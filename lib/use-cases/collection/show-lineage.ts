@@ -21,7 +21,12 @@ export const showLineageUseCase = workspaceUseCase(showLineage, async ({ tx, see
   const visible = await visibleIdsOfSpecies(tx, sees, species.id);
   const links: PedigreeLinks = {
     byId: new Map(pedigree.rows.map((row) => [row.id, row])),
-    possibleSires: new Map([...groupBy(pedigree.possibleSires, (row) => row.animalId)].map(([id, rows]) => [id, rows.map((row) => row.sireId)])),
+    possibleSires: new Map(
+      [...groupBy(pedigree.possibleSires, (row) => row.animalId)].map(([id, rows]) => [
+        id,
+        rows.map((row) => row.sireId),
+      ]),
+    ),
   };
   const chosen = root
     ? chooseLineage(links, visible, root.id, query.up, query.down)
@@ -38,7 +43,8 @@ export const showLineageUseCase = workspaceUseCase(showLineage, async ({ tx, see
     const row = links.byId.get(id);
     if (!row || !visible.has(id)) continue;
     if (row.damId) sexOfHidden.set(row.damId, 'female');
-    for (const sire of [row.sireId, ...(links.possibleSires.get(id) ?? [])]) if (sire) sexOfHidden.set(sire, 'male');
+    for (const sire of [row.sireId, ...(links.possibleSires.get(id) ?? [])])
+      if (sire) sexOfHidden.set(sire, 'male');
   }
 
   const nodes = [...chosen].flatMap((id): LineageNode[] => {
@@ -56,7 +62,11 @@ export const showLineageUseCase = workspaceUseCase(showLineage, async ({ tx, see
         hatchedOn: row.hatchedOn,
         status: row.status,
         description: beliefs.describe(id),
-        fill: belief && { shows: beliefs.shows(belief), carries: carriesProbability(beliefs, belief), words: beliefs.words(belief) },
+        fill: belief && {
+          shows: beliefs.shows(belief),
+          carries: carriesProbability(beliefs, belief),
+          words: beliefs.words(belief),
+        },
         sire: keyOf(row.sireId),
         dam: keyOf(row.damId),
         possibleSires: (links.possibleSires.get(id) ?? []).map(keyOf).filter((key) => key !== null),
@@ -67,17 +77,39 @@ export const showLineageUseCase = workspaceUseCase(showLineage, async ({ tx, see
     root: root?.id ?? null,
     speciesId: species.id,
     loci: beliefs.loci.map(({ id, name }) => ({ id, name })),
-    nodes: nodes.sort((a, b) => (a.hatchedOn ?? '').localeCompare(b.hatchedOn ?? '') || a.code.localeCompare(b.code, 'en', { numeric: true })),
+    nodes: nodes.sort(
+      (a, b) =>
+        (a.hatchedOn ?? '').localeCompare(b.hatchedOn ?? '') ||
+        a.code.localeCompare(b.code, 'en', { numeric: true }),
+    ),
     relatedMates: relatedMates(links, chosen, visible, (id) => hidden.get(id) ?? id),
   };
 });
 
 function hiddenNode(key: string, sex: LineageNode['sex']): LineageNode {
-  return { key, shown: false, code: '', name: '', sex, hatchedOn: null, status: null, description: '', fill: null, sire: null, dam: null, possibleSires: [] };
+  return {
+    key,
+    shown: false,
+    code: '',
+    name: '',
+    sex,
+    hatchedOn: null,
+    status: null,
+    description: '',
+    fill: null,
+    sire: null,
+    dam: null,
+    possibleSires: [],
+  };
 }
 
 /** Pairs of parents in the graph that have a common ancestor, seen or not. */
-function relatedMates(links: PedigreeLinks, chosen: ReadonlySet<AnimalId>, visible: ReadonlySet<AnimalId>, keyOf: (id: AnimalId) => string): [string, string][] {
+function relatedMates(
+  links: PedigreeLinks,
+  chosen: ReadonlySet<AnimalId>,
+  visible: ReadonlySet<AnimalId>,
+  keyOf: (id: AnimalId) => string,
+): [string, string][] {
   const areRelated = relationFinder(links);
   const pairs = new Map<string, [string, string]>();
   for (const id of chosen) {

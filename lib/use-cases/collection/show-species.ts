@@ -12,7 +12,13 @@ export const showSpeciesUseCase = workspaceUseCase(showSpecies, async ({ tx }, {
   if (!species) throw notFound('species');
   const { id, name, scientificName, sexSystem, codePrefix, profile, version } = species;
   return {
-    id, name, scientificName, sexSystem, codePrefix, profile, version,
+    id,
+    name,
+    scientificName,
+    sexSystem,
+    codePrefix,
+    profile,
+    version,
     loci: (await listLoci(tx, id)).map((row) => presentLocus(row, sexSystem)),
     combinations: await listCombinations(tx, id),
   };

@@ -15,7 +15,10 @@ function locusOf(species: Pick<SpeciesBeliefs, 'loci'>, belief: LocusBelief): Be
 /** Probability of at least one copy of an allele other than the wild type; 0 and 1 exactly when certain. */
 export function carriesProbability(species: Pick<SpeciesBeliefs, 'loci'>, belief: LocusBelief): number {
   const { definition } = locusOf(species, belief);
-  const carries = belief.genotypes.reduce((sum, { genotype, probability }) => sum + (isMutant(definition, genotype) ? probability : 0), 0);
+  const carries = belief.genotypes.reduce(
+    (sum, { genotype, probability }) => sum + (isMutant(definition, genotype) ? probability : 0),
+    0,
+  );
   return carries > CERTAIN ? 1 : carries < 1e-9 ? 0 : carries;
 }
 
@@ -23,22 +26,33 @@ export function carriesProbability(species: Pick<SpeciesBeliefs, 'loci'>, belief
 export function isShown(species: Pick<SpeciesBeliefs, 'loci'>, belief: LocusBelief): boolean {
   if (belief.shows !== null) return belief.shows !== NORMAL;
   const { definition } = locusOf(species, belief);
-  return belief.genotypes.length > 0 && belief.genotypes.every(({ genotype }) => !phenotypeChances(definition, genotype).has(NORMAL));
+  return (
+    belief.genotypes.length > 0 &&
+    belief.genotypes.every(({ genotype }) => !phenotypeChances(definition, genotype).has(NORMAL))
+  );
 }
 
 /** The two parental copies as they are drawn: the left half is the second copy, the right one the first. */
-export function drawnCopies(species: Pick<SpeciesBeliefs, 'loci'>, belief: LocusBelief): {
+export function drawnCopies(
+  species: Pick<SpeciesBeliefs, 'loci'>,
+  belief: LocusBelief,
+): {
   copies: [{ letter: string; probability: number }, { letter: string; probability: number }];
   single: boolean;
 } {
   const { definition } = locusOf(species, belief);
   const wild = definition.alleles[0]?.symbol ?? '+';
-  const single = belief.genotypes.length > 0 && belief.genotypes.every(({ genotype }) => allelesOf(genotype).length === 1);
-  const mutants = belief.genotypes.map(({ genotype, probability }) => ({ found: allelesOf(genotype).filter((symbol) => symbol !== wild), probability }));
+  const single =
+    belief.genotypes.length > 0 && belief.genotypes.every(({ genotype }) => allelesOf(genotype).length === 1);
+  const mutants = belief.genotypes.map(({ genotype, probability }) => ({
+    found: allelesOf(genotype).filter((symbol) => symbol !== wild),
+    probability,
+  }));
   const half = (copies: number) => {
     const with_ = mutants.filter(({ found }) => found.length >= copies);
     const probability = with_.reduce((sum, one) => sum + one.probability, 0);
-    const letter = probability > 0 ? (with_[0]?.found[copies === 2 ? 0 : with_[0].found.length - 1] ?? wild) : wild;
+    const letter =
+      probability > 0 ? (with_[0]?.found[copies === 2 ? 0 : with_[0].found.length - 1] ?? wild) : wild;
     return { letter, probability: probability > CERTAIN ? 1 : probability < 1e-9 ? 0 : probability };
   };
   return { copies: [half(2), half(1)], single };
@@ -61,7 +75,9 @@ export function wordsOf(species: Pick<SpeciesBeliefs, 'loci'>, belief: LocusBeli
 /** What all of its possible genotypes show, where that is one and the same. */
 function impliedLook(species: Pick<SpeciesBeliefs, 'loci'>, belief: LocusBelief): string {
   const { definition } = locusOf(species, belief);
-  const looks = new Set(belief.genotypes.flatMap(({ genotype }) => [...phenotypeChances(definition, genotype).keys()]));
+  const looks = new Set(
+    belief.genotypes.flatMap(({ genotype }) => [...phenotypeChances(definition, genotype).keys()]),
+  );
   const [only] = looks;
   return looks.size === 1 ? (only ?? NORMAL) : NORMAL;
 }

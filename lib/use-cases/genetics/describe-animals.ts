@@ -11,7 +11,8 @@ export async function describeAnimals(
   const words = new Map<AnimalId, string>();
   for (const speciesId of new Set(animals.map((animal) => animal.speciesId))) {
     const beliefs = await loadBeliefs(tx, speciesId);
-    for (const animal of animals) if (animal.speciesId === speciesId) words.set(animal.id, beliefs.describe(animal.id));
+    for (const animal of animals)
+      if (animal.speciesId === speciesId) words.set(animal.id, beliefs.describe(animal.id));
   }
   return (id) => words.get(id) ?? '';
 }

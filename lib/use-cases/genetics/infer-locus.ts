@@ -47,8 +47,12 @@ export function inferLocus(
       sexSystem: system,
       loci: [locus],
       frequencies: { [locus.id]: rareMutants(locus, FOUNDER_MUTANTS) },
-      animals: animals.map((animal) => (isFounder(animal) ? { id: animal.id, sex: animal.sex } : memberOf(animal))),
-      evidence: animals.flatMap((animal) => evidenceOf(locus, animal.id, claims.get(animal.id) ?? null, isFounder(animal))),
+      animals: animals.map((animal) =>
+        isFounder(animal) ? { id: animal.id, sex: animal.sex } : memberOf(animal),
+      ),
+      evidence: animals.flatMap((animal) =>
+        evidenceOf(locus, animal.id, claims.get(animal.id) ?? null, isFounder(animal)),
+      ),
     });
     const found = beliefs.get(locus.id);
     if (impossible || !found) return passDown(locus, system, animals, claims);
@@ -59,31 +63,47 @@ export function inferLocus(
   }
 }
 
-const isUncertain = (claim: LocusClaim | undefined) => Object.keys(claim?.carries?.genotypes ?? {}).length > 1;
+const isUncertain = (claim: LocusClaim | undefined) =>
+  Object.keys(claim?.carries?.genotypes ?? {}).length > 1;
 
 function memberOf({ id, sex, sireId, damId, possibleSires }: PedigreeAnimal): PedigreeMember {
   const total = possibleSires.reduce((sum, { weight }) => sum + weight, 0);
-  const sires = sireId === null && total > 0 ? Object.fromEntries(possibleSires.map((sire) => [sire.sireId, sire.weight / total])) : undefined;
+  const sires =
+    sireId === null && total > 0
+      ? Object.fromEntries(possibleSires.map((sire) => [sire.sireId, sire.weight / total]))
+      : undefined;
   return { id, sex, sire: sireId, dam: damId, ...(sires ? { sires } : {}) };
 }
 
-function evidenceOf(locus: LocusDefinition, animal: AnimalId, claim: LocusClaim | null, isFounder: boolean): Evidence[] {
+function evidenceOf(
+  locus: LocusDefinition,
+  animal: AnimalId,
+  claim: LocusClaim | null,
+  isFounder: boolean,
+): Evidence[] {
   if (!claim) return [];
   const evidence: Evidence[] = [];
-  if (claim.shows !== null) evidence.push({ animal, locus: locus.id, kind: 'phenotype', phenotype: claim.shows, mislabelling: SLIP });
+  if (claim.shows !== null)
+    evidence.push({ animal, locus: locus.id, kind: 'phenotype', phenotype: claim.shows, mislabelling: SLIP });
   const stated = Object.entries(claim.carries?.genotypes ?? {});
   const [first] = stated;
-  if (first && stated.length === 1) evidence.push({ animal, locus: locus.id, kind: 'test', genotype: first[0], error: SLIP });
+  if (first && stated.length === 1)
+    evidence.push({ animal, locus: locus.id, kind: 'test', genotype: first[0], error: SLIP });
   // Chances of an animal with known ancestors follow from them; taking them as seen too would count them twice.
   else if (first && isFounder) {
-    const genotypes = Object.fromEntries(stated.map(([genotype, text]) => [genotype, parseProbability(text, locus.id).valueOf()]));
+    const genotypes = Object.fromEntries(
+      stated.map(([genotype, text]) => [genotype, parseProbability(text, locus.id).valueOf()]),
+    );
     evidence.push({ animal, locus: locus.id, kind: 'prior', genotypes });
   }
   return evidence;
 }
 
 /** Animals with at least one ancestor of whom something is recorded. */
-function withInformedAncestors(animals: readonly PedigreeAnimal[], claims: ReadonlyMap<AnimalId, LocusClaim>): Set<AnimalId> {
+function withInformedAncestors(
+  animals: readonly PedigreeAnimal[],
+  claims: ReadonlyMap<AnimalId, LocusClaim>,
+): Set<AnimalId> {
   const byId = new Map(animals.map((animal) => [animal.id, animal]));
   const known = new Map<AnimalId, boolean>();
   const isInformed = (id: AnimalId): boolean => {
@@ -91,7 +111,11 @@ function withInformedAncestors(animals: readonly PedigreeAnimal[], claims: Reado
     if (there !== undefined) return there;
     known.set(id, false);
     const animal = byId.get(id);
-    const parents = [animal?.sireId ?? null, animal?.damId ?? null, ...(animal?.possibleSires ?? []).map(({ sireId }) => sireId)];
+    const parents = [
+      animal?.sireId ?? null,
+      animal?.damId ?? null,
+      ...(animal?.possibleSires ?? []).map(({ sireId }) => sireId),
+    ];
     const informed = parents.some((parent) => parent !== null && (claims.has(parent) || isInformed(parent)));
     known.set(id, informed);
     return informed;

@@ -20,14 +20,29 @@ export interface OwnRecord {
  * What an animal probably is at a locus, from its parents' odds by Mendel's first law and from its own record by
  * Bayes' rule. What is recorded as carried stands as it is recorded.
  */
-export function inferGenotype(locus: LocusDefinition, system: SexSystem, { sex, claim, sire, dam }: OwnRecord): Odds {
+export function inferGenotype(
+  locus: LocusDefinition,
+  system: SexSystem,
+  { sex, claim, sire, dam }: OwnRecord,
+): Odds {
   if (claim?.carries) {
-    return normalise(Object.entries(claim.carries.genotypes).map(([genotype, text]) => [genotype, parseProbability(text, locus.id).valueOf()]));
+    return normalise(
+      Object.entries(claim.carries.genotypes).map(([genotype, text]) => [
+        genotype,
+        parseProbability(text, locus.id).valueOf(),
+      ]),
+    );
   }
-  const prior = sire || dam ? fromParents(locus, system, sex, sire, dam) : founder(locus, system, sex, claim?.shows ?? null);
+  const prior =
+    sire || dam
+      ? fromParents(locus, system, sex, sire, dam)
+      : founder(locus, system, sex, claim?.shows ?? null);
   const shows = claim?.shows ?? null;
   if (shows === null) return prior;
-  const seen = [...prior].map(([genotype, odds]): [string, number] => [genotype, odds * (phenotypeChances(locus, genotype).get(shows)?.valueOf() ?? 0)]);
+  const seen = [...prior].map(([genotype, odds]): [string, number] => [
+    genotype,
+    odds * (phenotypeChances(locus, genotype).get(shows)?.valueOf() ?? 0),
+  ]);
   // Seen against all odds: a parent carries more than is known. The record of one's own eyes wins.
   return seen.some(([, odds]) => odds > 0) ? normalise(seen) : founder(locus, system, sex, shows);
 }
@@ -39,7 +54,9 @@ function normalise(entries: readonly [string, number][]): Odds {
 
 /** An animal without known parents, by the trade's convention: as many mutant copies as what is seen of it needs. */
 function founder(locus: LocusDefinition, system: SexSystem, sex: Sex, shows: string | null): Odds {
-  return toNumbers(beliefFromStatements(locus, sex, system, shows === null ? [] : [{ kind: 'shows', phenotype: shows }]));
+  return toNumbers(
+    beliefFromStatements(locus, sex, system, shows === null ? [] : [{ kind: 'shows', phenotype: shows }]),
+  );
 }
 
 /** Which alleles a parent hands on: its odds over its gametes, the wild type for an unknown one. */
@@ -47,22 +64,36 @@ function gametes(locus: LocusDefinition, odds: Odds | null): [string, number][] 
   if (!odds) return [[locus.alleles[0]?.symbol ?? '+', 1]];
   const total = new Map<string, number>();
   for (const [genotype, probability] of odds) {
-    for (const [symbol, chance] of gametesOf(genotype)) total.set(symbol, (total.get(symbol) ?? 0) + probability * chance.valueOf());
+    for (const [symbol, chance] of gametesOf(genotype))
+      total.set(symbol, (total.get(symbol) ?? 0) + probability * chance.valueOf());
   }
   return [...total];
 }
 
-function fromParents(locus: LocusDefinition, system: SexSystem, sex: Sex, sire: Odds | null, dam: Odds | null): Odds {
+function fromParents(
+  locus: LocusDefinition,
+  system: SexSystem,
+  sex: Sex,
+  sire: Odds | null,
+  dam: Odds | null,
+): Odds {
   const [fromSire, fromDam] = [gametes(locus, sire), gametes(locus, dam)];
-  const both = fromSire.flatMap(([a, x]) => fromDam.map(([b, y]): [string, number] => [joinAlleles(locus, [a, b]), x * y]));
+  const both = fromSire.flatMap(([a, x]) =>
+    fromDam.map(([b, y]): [string, number] => [joinAlleles(locus, [a, b]), x * y]),
+  );
   // X passes from a father to daughters only, Z from a mother to sons only; the other parent gives to every young.
   const one = locus.chromosome === 'X' ? fromDam : fromSire;
-  const isSingleSex = (which: 'male' | 'female') => isSexLinked(locus) && genotypesOf(locus, which, system).every((genotype) => !genotype.includes('/'));
+  const isSingleSex = (which: 'male' | 'female') =>
+    isSexLinked(locus) && genotypesOf(locus, which, system).every((genotype) => !genotype.includes('/'));
   const ofSex = (which: 'male' | 'female') => (isSingleSex(which) ? one : both);
-  const entries = sex === 'unknown' && isSexLinked(locus) ? [...ofSex('male'), ...ofSex('female')] : ofSex(sex === 'unknown' ? 'female' : sex);
+  const entries =
+    sex === 'unknown' && isSexLinked(locus)
+      ? [...ofSex('male'), ...ofSex('female')]
+      : ofSex(sex === 'unknown' ? 'female' : sex);
   const merged = new Map<string, number>();
   // Eggs of a lethal genotype do not become animals.
-  for (const [genotype, odds] of entries) if (!locus.lethal.includes(genotype)) merged.set(genotype, (merged.get(genotype) ?? 0) + odds);
+  for (const [genotype, odds] of entries)
+    if (!locus.lethal.includes(genotype)) merged.set(genotype, (merged.get(genotype) ?? 0) + odds);
   return normalise([...merged]);
 }
 
@@ -70,6 +101,7 @@ function fromParents(locus: LocusDefinition, system: SexSystem, sex: Sex, sire: 
 export function mixOdds(parents: readonly { odds: Odds; weight: number }[]): Odds | null {
   if (parents.length === 0) return null;
   const total = new Map<string, number>();
-  for (const { odds, weight } of parents) for (const [genotype, p] of odds) total.set(genotype, (total.get(genotype) ?? 0) + p * weight);
+  for (const { odds, weight } of parents)
+    for (const [genotype, p] of odds) total.set(genotype, (total.get(genotype) ?? 0) + p * weight);
   return normalise([...total]);
 }

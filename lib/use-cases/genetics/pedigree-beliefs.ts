@@ -15,6 +15,9 @@ import type { LocusBelief, SpeciesBeliefs } from './species-beliefs';
 const kept = new Map<SpeciesId, { fingerprint: string; beliefs: SpeciesBeliefs }>();
 const MOST_KEPT = 24;
 
+/** Chances of carrying below this are left out of the one-line description; the record shows them. */
+const LEAST_TOLD = 0.05;
+
 /**
  * What every animal of a species probably carries. The full pedigree of the workspace is used, whoever asks: what a
  * viewer is shown of it is narrowed by the caller. Computed once per state of the data.
@@ -39,9 +42,19 @@ type Loaded = NonNullable<Awaited<ReturnType<typeof loadSpeciesForComputing>>>;
 type Pedigree = Awaited<ReturnType<typeof loadPedigree>>;
 type Claims = Awaited<ReturnType<typeof loadClaims>>;
 
-function inferBeliefs({ species, loci, combinations }: Loaded, { rows, possibleSires }: Pedigree, claimRows: Claims): SpeciesBeliefs {
+function inferBeliefs(
+  { species, loci, combinations }: Loaded,
+  { rows, possibleSires }: Pedigree,
+  claimRows: Claims,
+): SpeciesBeliefs {
   const sires = groupBy(possibleSires, (row) => row.animalId);
-  const animals = rows.map(({ id, sex, sireId, damId }): PedigreeAnimal => ({ id, sex, sireId, damId, possibleSires: sires.get(id) ?? [] }));
+  const animals = rows.map(({ id, sex, sireId, damId }): PedigreeAnimal => ({
+    id,
+    sex,
+    sireId,
+    damId,
+    possibleSires: sires.get(id) ?? [],
+  }));
   const byId = new Map(animals.map((animal) => [animal.id, animal]));
   const claimsAt = new Map<LocusId, Map<AnimalId, LocusClaim>>(loci.map(({ id }) => [id, new Map()]));
   for (const { animalId, locusId, claim } of claimRows) claimsAt.get(locusId)?.set(animalId, claim);
@@ -50,8 +63,11 @@ function inferBeliefs({ species, loci, combinations }: Loaded, { rows, possibleS
 
   const odds = (animalId: AnimalId, locusId: LocusId): Odds => {
     const locus = loci.find(({ id }) => id === locusId);
-    if (!locus || !byId.has(animalId)) throw new RangeError(`No animal ${animalId} or locus ${locusId} in this species.`);
-    const all = computed.get(locusId) ?? inferLocus(locus.definition, species.sexSystem, animals, claimsAt.get(locusId) ?? new Map());
+    if (!locus || !byId.has(animalId))
+      throw new RangeError(`No animal ${animalId} or locus ${locusId} in this species.`);
+    const all =
+      computed.get(locusId) ??
+      inferLocus(locus.definition, species.sexSystem, animals, claimsAt.get(locusId) ?? new Map());
     computed.set(locusId, all);
     return all.get(animalId) ?? new Map();
   };
@@ -62,7 +78,9 @@ function inferBeliefs({ species, loci, combinations }: Loaded, { rows, possibleS
     const hasParents = Boolean(row?.sireId ?? row?.damId) || sires.has(animalId);
     return {
       locusId,
-      genotypes: [...odds(animalId, locusId)].map(([genotype, probability]) => ({ genotype, probability })).sort((a, b) => b.probability - a.probability),
+      genotypes: [...odds(animalId, locusId)]
+        .map(([genotype, probability]) => ({ genotype, probability }))
+        .sort((a, b) => b.probability - a.probability),
       shows: claim?.shows ?? null,
       source: claim ? 'recorded' : hasParents ? 'relatives' : 'nothing',
     };
@@ -75,10 +93,16 @@ function inferBeliefs({ species, loci, combinations }: Loaded, { rows, possibleS
     loci,
     belief,
     describe: (animalId) => {
-      const said = described.get(animalId) ??
+      const said =
+        described.get(animalId) ??
         describeAnimal(
-          loci.map(({ id, definition }) => ({ locus: definition, shown: claimsAt.get(id)?.get(animalId)?.shows ?? null, belief: odds(animalId, id) })),
+          loci.map(({ id, definition }) => ({
+            locus: definition,
+            shown: claimsAt.get(id)?.get(animalId)?.shows ?? null,
+            belief: odds(animalId, id),
+          })),
           combinations,
+          LEAST_TOLD,
         );
       described.set(animalId, said);
       return said;

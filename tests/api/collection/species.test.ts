@@ -32,8 +32,12 @@ const definition = (change: Record<string, unknown> = {}) => ({
   ...change,
 });
 const create = (name: string, change: Record<string, unknown> = {}, by = workspace.owner) =>
-  performAs(workspace, by, createLocusUseCase, { params: { species: workspace.speciesId }, body: { name, definition: definition(change) } });
-const show = () => performAs(workspace, workspace.keeper, showSpeciesUseCase, { params: { species: workspace.speciesId } });
+  performAs(workspace, by, createLocusUseCase, {
+    params: { species: workspace.speciesId },
+    body: { name, definition: definition(change) },
+  });
+const show = () =>
+  performAs(workspace, workspace.keeper, showSpeciesUseCase, { params: { species: workspace.speciesId } });
 
 describe('loci as data', () => {
   it('a new locus is there for everyone, each genotype in words', async () => {
@@ -49,10 +53,26 @@ describe('loci as data', () => {
   it.each([
     ['an allele that is not there', { phenotypes: { '+/z': 'Odd' } }, 'definition.alleles'],
     ['a chromosome that the species does not have', { chromosome: 'Z' }, 'definition.chromosome'],
-    ['chances that do not add up', { penetrance: { 'p/p': { 'Super Pastel': '1/2' } } }, 'definition.penetrance'],
-    ['two alleles of one symbol', { alleles: [{ symbol: '+', name: 'wild type' }, { symbol: '+', name: 'other' }] }, 'definition.alleles'],
+    [
+      'chances that do not add up',
+      { penetrance: { 'p/p': { 'Super Pastel': '1/2' } } },
+      'definition.penetrance',
+    ],
+    [
+      'two alleles of one symbol',
+      {
+        alleles: [
+          { symbol: '+', name: 'wild type' },
+          { symbol: '+', name: 'other' },
+        ],
+      },
+      'definition.alleles',
+    ],
   ])('refuses %s', async (_, change, field) => {
-    await expect(create(`Wrong ${field}`, change)).rejects.toMatchObject({ code: 'invalid', more: { errors: [{ field }] } });
+    await expect(create(`Wrong ${field}`, change)).rejects.toMatchObject({
+      code: 'invalid',
+      more: { errors: [{ field }] },
+    });
   });
 
   it('refuses a change that would contradict what is recorded, and a removal of what is used', async () => {
@@ -67,10 +87,21 @@ describe('loci as data', () => {
       },
     });
     const edit = (change: Record<string, unknown>, version = 1) =>
-      performAs(workspace, workspace.owner, editLocusUseCase, { params: { locus: id }, body: { name: 'Used', definition: definition(change), version } });
-    await expect(edit({ phenotypes: { '+/p': 'Pastel' } })).rejects.toMatchObject({ code: 'invalid', detail: expect.stringMatching(/USED-1/) });
-    await expect(performAs(workspace, workspace.owner, removeLocusUseCase, { params: { locus: id } })).rejects.toMatchObject({ code: 'wrong_state' });
-    await expect(edit({ lethal: ['p/p'] })).rejects.toMatchObject({ code: 'invalid', detail: expect.stringMatching(/USED-1/) });
+      performAs(workspace, workspace.owner, editLocusUseCase, {
+        params: { locus: id },
+        body: { name: 'Used', definition: definition(change), version },
+      });
+    await expect(edit({ phenotypes: { '+/p': 'Pastel' } })).rejects.toMatchObject({
+      code: 'invalid',
+      detail: expect.stringMatching(/USED-1/),
+    });
+    await expect(
+      performAs(workspace, workspace.owner, removeLocusUseCase, { params: { locus: id } }),
+    ).rejects.toMatchObject({ code: 'wrong_state' });
+    await expect(edit({ lethal: ['p/p'] })).rejects.toMatchObject({
+      code: 'invalid',
+      detail: expect.stringMatching(/USED-1/),
+    });
     const welfare = [{ text: 'Made-up harm', source: 'made up for the test', genotypes: ['p/p'] }];
     expect(await edit({ welfare })).toEqual({ version: 2 });
     await expect(edit({}, 1)).rejects.toMatchObject({ code: 'stale' });
@@ -81,7 +112,10 @@ describe('loci as data', () => {
     const { id: pastel } = await create('Second pastel');
     const looks: Record<string, string> = { [workspace.locusId]: 'Albino', [pastel]: 'Pastel' };
     const combine = (phenotypes: Record<string, string>) =>
-      performAs(workspace, workspace.owner, createCombinationUseCase, { params: { species: workspace.speciesId }, body: { name: 'Butter', phenotypes } });
+      performAs(workspace, workspace.owner, createCombinationUseCase, {
+        params: { species: workspace.speciesId },
+        body: { name: 'Butter', phenotypes },
+      });
     await expect(combine({ ...looks, [pastel]: 'Clown' })).rejects.toMatchObject({ code: 'invalid' });
     await combine(looks);
     const { id } = await performAs(workspace, workspace.owner, createAnimalUseCase, {
@@ -89,16 +123,29 @@ describe('loci as data', () => {
         speciesId: workspace.speciesId,
         sex: 'male',
         owners: [{ partyId: workspace.owner.partyId, parts: 1 }],
-        loci: Object.entries(looks).map(([locusId, shows]) => ({ locusId: locusId as LocusId, shows, carries: null })),
+        loci: Object.entries(looks).map(([locusId, shows]) => ({
+          locusId: locusId as LocusId,
+          shows,
+          carries: null,
+        })),
       },
     });
-    expect((await performAs(workspace, workspace.owner, showAnimalUseCase, { params: { animal: id } })).description).toBe('Butter');
+    expect(
+      (await performAs(workspace, workspace.owner, showAnimalUseCase, { params: { animal: id } }))
+        .description,
+    ).toBe('Butter');
   });
 
-  it('keeps how sex is decided once animals depend on it, and is the owner\'s to change', async () => {
+  it("keeps how sex is decided once animals depend on it, and is the owner's to change", async () => {
     const edit = (by = workspace.owner) =>
-      performAs(workspace, by, editSpeciesUseCase, { params: { species: workspace.speciesId }, body: { version: 1, sexSystem: 'ZW' } });
-    await expect(edit()).rejects.toMatchObject({ code: 'invalid', more: { errors: [{ field: 'sexSystem' }] } });
+      performAs(workspace, by, editSpeciesUseCase, {
+        params: { species: workspace.speciesId },
+        body: { version: 1, sexSystem: 'ZW' },
+      });
+    await expect(edit()).rejects.toMatchObject({
+      code: 'invalid',
+      more: { errors: [{ field: 'sexSystem' }] },
+    });
     await expect(edit(workspace.partner)).rejects.toMatchObject({ code: 'not_allowed' });
     await expect(create('Keeper locus', {}, workspace.keeper)).rejects.toMatchObject({ code: 'not_allowed' });
   });

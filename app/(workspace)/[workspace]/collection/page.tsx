@@ -21,7 +21,10 @@ export default async function CollectionPage(props: {
   return (
     <Prefetch
       from={`/${workspace}/collection`}
-      queries={[prefetched(listAnimalsUseCase, { params, query }), prefetched(listSpeciesUseCase, { params })]}
+      queries={[
+        prefetched(listAnimalsUseCase, { params, query }),
+        prefetched(listSpeciesUseCase, { params }),
+      ]}
     >
       <CollectionScreen />
     </Prefetch>

@@ -8,7 +8,10 @@ export const metadata: Metadata = { title: 'Import from CSV' };
 export default async function ImportPage(props: { params: Promise<{ workspace: string }> }) {
   const { workspace } = await props.params;
   return (
-    <Prefetch from={`/${workspace}/collection/import`} queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}>
+    <Prefetch
+      from={`/${workspace}/collection/import`}
+      queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}
+    >
       <ImportScreen />
     </Prefetch>
   );

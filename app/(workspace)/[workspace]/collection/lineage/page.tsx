@@ -9,7 +9,10 @@ export const metadata: Metadata = { title: 'Lineage' };
 export default async function LineagePage(props: { params: Promise<{ workspace: string }> }) {
   const { workspace } = await props.params;
   return (
-    <Prefetch from={`/${workspace}/collection/lineage`} queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}>
+    <Prefetch
+      from={`/${workspace}/collection/lineage`}
+      queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}
+    >
       <LineageScreen />
     </Prefetch>
   );

@@ -8,7 +8,10 @@ export const metadata: Metadata = { title: 'Add an animal' };
 export default async function NewAnimalPage(props: { params: Promise<{ workspace: string }> }) {
   const { workspace } = await props.params;
   return (
-    <Prefetch from={`/${workspace}/collection/new`} queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}>
+    <Prefetch
+      from={`/${workspace}/collection/new`}
+      queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}
+    >
       <NewAnimalScreen />
     </Prefetch>
   );

@@ -8,7 +8,10 @@ export const metadata: Metadata = { title: 'Species and loci' };
 export default async function SpeciesPage(props: { params: Promise<{ workspace: string }> }) {
   const { workspace } = await props.params;
   return (
-    <Prefetch from={`/${workspace}/collection/species`} queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}>
+    <Prefetch
+      from={`/${workspace}/collection/species`}
+      queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}
+    >
       <SpeciesScreen />
     </Prefetch>
   );

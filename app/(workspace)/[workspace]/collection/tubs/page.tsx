@@ -8,7 +8,10 @@ export const metadata: Metadata = { title: 'Tubs' };
 export default async function TubsPage(props: { params: Promise<{ workspace: string }> }) {
   const { workspace } = await props.params;
   return (
-    <Prefetch from={`/${workspace}/collection/tubs`} queries={[prefetched(listTubsUseCase, { params: { workspace } })]}>
+    <Prefetch
+      from={`/${workspace}/collection/tubs`}
+      queries={[prefetched(listTubsUseCase, { params: { workspace } })]}
+    >
       <TubsScreen />
     </Prefetch>
   );

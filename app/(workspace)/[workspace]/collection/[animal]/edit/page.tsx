@@ -7,12 +7,17 @@ import { showAnimalUseCase } from '@/lib/use-cases/collection/show-animal';
 
 export const metadata: Metadata = { title: 'Edit an animal' };
 
-export default async function EditAnimalPage(props: { params: Promise<{ workspace: string; animal: string }> }) {
+export default async function EditAnimalPage(props: {
+  params: Promise<{ workspace: string; animal: string }>;
+}) {
   const { workspace, animal } = await props.params;
   return (
     <Prefetch
       from={`/${workspace}/collection/${animal}/edit`}
-      queries={[prefetched(showAnimalUseCase, { params: { workspace, animal } }), prefetched(listSpeciesUseCase, { params: { workspace } })]}
+      queries={[
+        prefetched(showAnimalUseCase, { params: { workspace, animal } }),
+        prefetched(listSpeciesUseCase, { params: { workspace } }),
+      ]}
     >
       <EditAnimalScreen id={animal as AnimalId} />
     </Prefetch>
