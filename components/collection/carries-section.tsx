@@ -30,7 +30,7 @@ export function CarriesSection({ animal }: { animal: AnimalRecord }) {
             className="grid grid-cols-[minmax(0,1fr)_auto_minmax(0,1fr)] items-center gap-3"
           >
             <span className="font-semibold break-words">{locus.name}</span>
-            <AllelePair locus={locus.name} copies={locus.copies} note={locus.words} />
+            <AllelePair locus={locus.name} copies={locus.copies} note={locus.words} className="!w-18" />
             <span className="text-sm text-ink-3">
               {locus.words}
               {locus.source === 'relatives' ? ', by its relatives' : ''}

@@ -19,7 +19,7 @@ export function LineageChoice({
   const search = useDeferredValue(text);
   const found = useAnimals({ search: search || undefined, limit: 60, sort: 'code' });
   return (
-    <div className="w-56">
+    <div className="w-48 max-sm:w-full">
       <Combobox
         aria-label="Animal"
         placeholder="Choose an animal"

@@ -139,7 +139,7 @@ export function LineageScreen() {
             />
           ) : null}
           {data ? (
-            <div className="w-56">
+            <div className="w-48 max-sm:w-full">
               <Combobox
                 aria-label="Find in the graph"
                 placeholder="Find in the graph"

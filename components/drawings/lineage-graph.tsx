@@ -27,6 +27,9 @@ export interface LineageGraphProps {
   describe: (key: string) => string;
 }
 
+/** From here on the best ranks take too long to find (half a minute for a thousand animals); tight ones take a second. */
+const MANY_MATINGS = 60;
+
 const arrows = { ArrowUp: 'up', ArrowDown: 'down', ArrowLeft: 'left', ArrowRight: 'right' } as const;
 
 /**
@@ -245,7 +248,7 @@ function layOut(cy: Core, matings: readonly Mating[]): void {
     nodeSep: 26,
     rankSep: 34,
     edgeSep: 6,
-    ranker: 'network-simplex',
+    ranker: matings.length > MANY_MATINGS ? 'tight-tree' : 'network-simplex',
     animate: false,
     fit: false,
   };
@@ -253,12 +256,19 @@ function layOut(cy: Core, matings: readonly Mating[]): void {
   const places = new Map(
     cy.nodes('.animal').map((node): [string, Point] => [node.id(), { ...node.position() }]),
   );
+  const beside = placeMatings(matings, places);
   cy.batch(() => {
-    for (const [id, place] of placeMatings(matings, places)) {
+    matings.forEach(({ id }, index) => {
       const node = cy.getElementById(id);
-      node.position(place);
-      node.connectedEdges('.mate').removeClass('around');
-    }
+      const place = beside.get(id);
+      if (place) {
+        node.position(place);
+        node.connectedEdges('.mate').removeClass('around');
+        return;
+      }
+      // Bars below a row of parents stand a little apart, so that two of them do not read as one.
+      node.position('y', node.position('y') + ((index % 5) - 2) * 4);
+    });
   });
 }
 

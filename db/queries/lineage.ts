@@ -47,7 +47,8 @@ export async function loadClaims(tx: Transaction, speciesId: SpeciesId) {
       animals,
       and(eq(animals.workspaceId, animalLoci.workspaceId), eq(animals.id, animalLoci.animalId)),
     )
-    .where(eq(animals.speciesId, speciesId));
+    .where(eq(animals.speciesId, speciesId))
+    .orderBy(asc(animalLoci.animalId), asc(animalLoci.locusId));
 }
 
 /** A species with its loci and named combinations, to compute with. */

@@ -9,7 +9,9 @@ import { groupBy } from './group-by';
 import { isShown, wordsOf } from './copies';
 import { inferLocus, type PedigreeAnimal } from './infer-locus';
 import type { Odds } from './pass-down';
-import type { LocusBelief, SpeciesBeliefs } from './species-beliefs';
+import { chainHash } from '../hash';
+import type { SexSystem } from '@/lib/genetics/locus';
+import type { BeliefLocus, LocusBelief, SpeciesBeliefs } from './species-beliefs';
 
 /** Results by species, each with the state of the data that it was computed from. Few, as each holds a whole pedigree. */
 const kept = new Map<SpeciesId, { fingerprint: string; beliefs: SpeciesBeliefs }>();
@@ -36,6 +38,29 @@ export async function loadBeliefs(tx: Transaction, speciesId: SpeciesId): Promis
     kept.delete(oldest);
   }
   return beliefs;
+}
+
+/** The last posterior of each locus with what it was computed from: most edits change nothing of it. */
+const posteriors = new Map<LocusId, { inputs: string; odds: ReadonlyMap<AnimalId, Odds> }>();
+const MOST_POSTERIORS = 400;
+
+function inferOnce(
+  locus: BeliefLocus,
+  system: SexSystem,
+  animals: readonly PedigreeAnimal[],
+  claims: ReadonlyMap<AnimalId, LocusClaim>,
+): ReadonlyMap<AnimalId, Odds> {
+  const inputs = chainHash(null, [locus.definition, system, animals, [...claims]]);
+  const before = posteriors.get(locus.id);
+  if (before?.inputs === inputs) return before.odds;
+  const odds = inferLocus(locus.definition, system, animals, claims);
+  posteriors.delete(locus.id);
+  posteriors.set(locus.id, { inputs, odds });
+  for (const oldest of posteriors.keys()) {
+    if (posteriors.size <= MOST_POSTERIORS) break;
+    posteriors.delete(oldest);
+  }
+  return odds;
 }
 
 type Loaded = NonNullable<Awaited<ReturnType<typeof loadSpeciesForComputing>>>;
@@ -67,7 +92,7 @@ function inferBeliefs(
       throw new RangeError(`No animal ${animalId} or locus ${locusId} in this species.`);
     const all =
       computed.get(locusId) ??
-      inferLocus(locus.definition, species.sexSystem, animals, claimsAt.get(locusId) ?? new Map());
+      inferOnce(locus, species.sexSystem, animals, claimsAt.get(locusId) ?? new Map());
     computed.set(locusId, all);
     return all.get(animalId) ?? new Map();
   };
