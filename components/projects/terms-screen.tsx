@@ -139,7 +139,7 @@ function WithdrawTerms({ terms }: { terms: TermsDetail }) {
   const [open, setOpen] = useState(false);
   return (
     <>
-      <Button tone="plain" className="self-start text-alarm" onClick={() => setOpen(true)}>
+      <Button tone="quiet" size="sm" className="self-start" onClick={() => setOpen(true)}>
         Withdraw this version
       </Button>
       <ConfirmDialog

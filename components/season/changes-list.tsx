@@ -1,3 +1,4 @@
+import { sayDay } from '@/components/drawings/season-days';
 import type { VersionChange } from '@/lib/contracts/agreement';
 
 /** What differs from the version before: old struck through, new after the arrow. */
@@ -11,14 +12,17 @@ export function ChangesList({ changes }: { changes: readonly VersionChange[] }) 
           <dd className="min-w-0 break-words">
             {before ? (
               <>
-                <del className="text-ink-3">{before}</del> <span aria-hidden>→</span>
+                <del className="text-ink-3">{say(before)}</del> <span aria-hidden>→</span>
                 <span className="sr-only">is now</span>{' '}
               </>
             ) : null}
-            <ins className="font-semibold no-underline">{after || 'nothing'}</ins>
+            <ins className="font-semibold no-underline">{say(after) || 'nothing'}</ins>
           </dd>
         </div>
       ))}
     </dl>
   );
 }
+
+/** Days cross the wire as ISO 8601 and are told as people write them. */
+const say = (value: string) => (/^\d{4}-\d{2}-\d{2}$/.test(value) ? sayDay(value) : value);

@@ -1,3 +1,6 @@
+/** A fraction that a person can read, such as "5/12"; nothing for one with large numbers, where percent say more. */
+export const readableOdds = (odds: string): string | undefined => (odds.length <= 7 ? odds : undefined);
+
 /** "41", or "4.9" for few. */
 export const sayCount = (count: number) => (count >= 10 ? String(Math.round(count)) : count.toFixed(1).replace(/\.0$/, ''));
 

@@ -3,6 +3,7 @@ import { PlainTable, type PlainColumn } from '@/components/ui/plain-table';
 import type { SeenFigures } from '@/lib/contracts/pairing';
 import { formatMoney } from '@/lib/money/minor-units';
 import type { ReactNode } from 'react';
+import { readableOdds } from './odds-words';
 
 type Outcome = SeenFigures['outcomes'][number];
 
@@ -32,8 +33,10 @@ export function OutcomesTable({ figures, currency, price }: { figures: SeenFigur
       align: 'end',
       cell: (row) => (
         <>
-          {row.odds}
-          <span className="block text-sm text-ink-3">{percentText(row.probability)}</span>
+          {readableOdds(row.odds) ? <span className="block">{row.odds}</span> : null}
+          <span className={readableOdds(row.odds) ? 'block text-sm text-ink-3' : 'block'} title={row.odds}>
+            {percentText(row.probability)}
+          </span>
         </>
       ),
     },

@@ -3,7 +3,7 @@ import { AnimalCode } from '@/components/collection/animal-code';
 /** Sire and dam as on their labels. */
 export function PairCodes({ sire, dam, size = 'sm' }: { sire: string; dam: string; size?: 'sm' | 'md' }) {
   return (
-    <span className="inline-flex flex-wrap items-center gap-1.5">
+    <span className="inline-flex items-center gap-1">
       <AnimalCode code={sire} sex="male" size={size} />
       <span aria-hidden className="text-ink-3">
         ×

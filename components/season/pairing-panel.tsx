@@ -12,6 +12,7 @@ import { useParties, useWorkspace } from '@/lib/client/workspace';
 import type { PairingId } from '@/lib/contracts/ids';
 import type { PairingDetail } from '@/lib/contracts/pairing';
 import { DecisionButtons } from './decision-buttons';
+import { readableOdds } from './odds-words';
 import { PairCodes } from './pair-codes';
 import { PairingState } from './pairing-state';
 import { usePairingDecision } from './use-pairing-decision';
@@ -70,7 +71,7 @@ function PairingSummary({ pairing }: { pairing: PairingDetail }) {
               <OddsBar
                 name={`${row.looksLike}${row.carries ? `, ${row.carries}` : ''}${row.sex ? ` (${row.sex}s)` : ''}`}
                 probability={row.probability}
-                fraction={row.odds}
+                fraction={readableOdds(row.odds)}
                 atLeastOne={row.atLeastOne}
               />
             </li>

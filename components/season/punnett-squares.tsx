@@ -49,9 +49,13 @@ function Square({ square }: { square: PunnettSquare }) {
               {cells.map((cell, column) => (
                 <td
                   key={column}
-                  className={`rounded-sm px-2 py-2 align-top ${cell.looksLike ? 'bg-ember-tint text-ember-deep' : 'bg-rule-2 text-ink'}`}
+                  className={`rounded-sm px-1 py-1.5 align-top ${cell.looksLike ? 'bg-ember-tint text-ember-deep' : 'bg-rule-2 text-ink'}`}
                 >
-                  <span className="block font-semibold whitespace-nowrap">{cell.genotype}</span>
+                  {cell.genotype.split(' · ').map((genotype, locus) => (
+                    <span key={locus} className="block leading-4 font-semibold whitespace-nowrap">
+                      {genotype}
+                    </span>
+                  ))}
                   <span className="block font-sans text-tick">{cell.looksLike || 'normal'}</span>
                   <span className="block text-tick">{cell.odds}</span>
                 </td>

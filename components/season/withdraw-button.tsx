@@ -18,7 +18,7 @@ export function WithdrawButton({ pairing }: { pairing: PairingDetail }) {
   const [reason, setReason] = useState('');
   return (
     <>
-      <Button tone="plain" className="self-start text-alarm" onClick={() => setOpen(true)}>
+      <Button tone="quiet" size="sm" className="self-start" onClick={() => setOpen(true)}>
         Withdraw this pairing
       </Button>
       <ConfirmDialog

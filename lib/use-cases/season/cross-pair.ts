@@ -56,12 +56,15 @@ export function explainUncertainty(pair: CrossedPair, names: Record<'sire' | 'da
   if (!first) return null;
   const who = [...new Set(uncertain.map(({ side }) => names[side]))].join(' and ');
   const what = [...new Set(uncertain.map(({ locus }) => locus.name))].join(', ');
-  const shared = `It is not certain what ${who} carries at ${what}. All ${eggs} eggs have the same parents, so the odds of at least one are averaged over what these may be; they are not 1 − (1 − odds)^${eggs}.`;
+  const verb = who.includes(' and ') ? 'carry' : 'carries';
+  const shared = `It is not certain what ${who} ${verb} at ${what}. All ${eggs} eggs have the same parents, so the odds of at least one are averaged over what these may be: they are not 1 − (1 − odds) to the power of ${eggs}.`;
   const proofs = uncertain.flatMap(({ side, locus }) => proofOf(pair, side, locus, names[side], eggs, sexSystem) ?? []);
-  return [shared, ...proofs.slice(0, 2)].join(' ');
+  // The parent who is least certain has most to learn from the clutch.
+  const [best] = proofs.sort((a, b) => Math.abs(a.chance - 0.5) - Math.abs(b.chance - 0.5));
+  return best ? `${shared} ${best.text}` : shared;
 }
 
-function proofOf(pair: CrossedPair, side: 'sire' | 'dam', locus: BeliefLocus, name: string, eggs: number, sexSystem: SpeciesBeliefs['sexSystem']): string | null {
+function proofOf(pair: CrossedPair, side: 'sire' | 'dam', locus: BeliefLocus, name: string, eggs: number, sexSystem: SpeciesBeliefs['sexSystem']): { chance: number; text: string } | null {
   const own = pair.beliefs[side].get(locus.id);
   const other = pair.beliefs[side === 'sire' ? 'dam' : 'sire'].get(locus.id);
   if (!own || own.size !== 2 || other?.size !== 1) return null;
@@ -78,6 +81,7 @@ function proofOf(pair: CrossedPair, side: 'sire' | 'dam', locus: BeliefLocus, na
   if (!carrier || !free || showing(free[0]).gt(0)) return null;
   const left = carrier[1].mul(certain.sub(showing(carrier[0])).pow(eggs) ?? 0);
   const after = left.div(left.add(free[1])).valueOf();
-  const percent = (value: number) => `${Math.floor(value * 100 + 1e-9)}%`;
-  return `One ${locus.name} in this clutch proves ${name}; ${eggs} young without lower ${name} from ${percent(carrier[1].valueOf())} to ${percent(after)}.`;
+  const percent = (value: number) => (value < 0.01 ? 'under 1%' : `${Math.floor(value * 100 + 1e-9)}%`);
+  const chance = carrier[1].valueOf();
+  return { chance, text: `One ${locus.name} in this clutch proves ${name}; ${eggs} young without lower ${name} from ${percent(chance)} to ${percent(after)}.` };
 }
