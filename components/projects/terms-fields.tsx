@@ -1,6 +1,5 @@
 'use client';
 
-import { ShareStrip } from '@/components/drawings/share-strip';
 import { Checkbox } from '@/components/ui/checkbox';
 import { Field } from '@/components/ui/field';
 import { NumberInput } from '@/components/ui/number-input';
@@ -57,17 +56,6 @@ function SidesPanel({ draft, change, parties, messageFor }: Props) {
             <NumberInput whole value={draft.sireSide} onChange={(value) => change({ sireSide: whole(value) })} />
           </Field>
         </div>
-        {draft.damSide + draft.sireSide > 0 ? (
-          <ShareStrip
-            size="md"
-            labels="parts"
-            label="Sides of a pairing"
-            shares={[
-              { partner: 6, name: 'Dam side', parts: draft.damSide },
-              { partner: 7, name: 'Sire side', parts: draft.sireSide },
-            ]}
-          />
-        ) : null}
         <Checkbox
           label="A house share comes off the top"
           hint="For the building, heat and care, before anything is divided."

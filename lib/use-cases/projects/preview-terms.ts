@@ -31,8 +31,13 @@ async function chooseExample({ tx }: WorkspaceWorld, projectId: Parameters<typeo
   const animals = await listAnimalsOfProject(tx, projectId);
   const held = await listPartsInForce(tx, animals.map(({ id }) => id));
   const partsOf = (id: string) => held.filter(({ animalId }) => animalId === id).map(({ partyId, parts }) => ({ partyId, parts }));
-  const dam = animals.find(({ sex, id }) => sex === 'female' && partsOf(id).length > 0);
-  const sire = animals.find(({ sex, id }) => sex === 'male' && partsOf(id).length > 0);
+  const ofSex = (sex: 'male' | 'female') => animals.filter((animal) => animal.sex === sex && partsOf(animal.id).length > 0);
+  // The pair with the most owners shows most of what the terms do.
+  const owners = (ids: readonly string[]) => new Set(ids.flatMap((id) => partsOf(id).map(({ partyId }) => partyId))).size;
+  const [best] = ofSex('female')
+    .flatMap((dam) => ofSex('male').map((sire) => ({ dam, sire, owners: owners([dam.id, sire.id]) })))
+    .sort((a, b) => b.owners - a.owners);
+  const { dam, sire } = best ?? { dam: undefined, sire: undefined };
   const whole = (id: PartyId | undefined) => (id ? [{ partyId: id, parts: 1 }] : []);
   if (dam && sire) return { dam: partsOf(dam.id), sire: partsOf(sire.id), words: `A young of ${sire.code} × ${dam.code}, by their owners of today` };
   return { dam: whole(partyIds[0]), sire: whole(partyIds[1]), words: 'A young of a dam of the first party and a sire of the second' };
