@@ -4,7 +4,7 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { ArrowDown, ArrowUp, X } from 'lucide-react';
 import { useRouter } from 'next/navigation';
 import { useEffect } from 'react';
-import { useController, useForm, type Control } from 'react-hook-form';
+import { useController, useForm, useWatch, type Control } from 'react-hook-form';
 import { toast } from 'sonner';
 import { z } from 'zod';
 import { PartnerName } from '@/components/drawings/partner-name';
@@ -119,9 +119,9 @@ function EditForm({ project }: { project: ProjectDetail }) {
 
 function ProjectForm({ values, project, submitLabel, busy, error, onSubmit }: { values: FormValues; project?: ProjectDetail; submitLabel: string; busy: boolean; error: RequestError | null; onSubmit: (values: FormValues) => void }) {
   const form = useForm<FormValues>({ resolver: zodResolver(formSchema), defaultValues: values });
-  const { register, control, handleSubmit, watch, formState } = form;
+  const { register, control, handleSubmit, formState } = form;
   const species = useSpeciesList();
-  const chosenSpecies = watch('speciesId');
+  const chosenSpecies = useWatch({ control, name: 'speciesId' });
   const messageOf = (field: keyof FormValues) => formState.errors[field]?.message ?? error?.messageFor(field);
   useEffect(() => {
     if (!formState.isDirty || formState.isSubmitSuccessful) return;
