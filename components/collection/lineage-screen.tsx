@@ -250,7 +250,7 @@ export function sayNode(lineage: Lineage, key: string): string {
         : null,
     node.dam ? `dam ${codes.get(node.dam)}` : null,
   ].filter(Boolean);
-  return [node.code, sexWords[node.sex].toLowerCase(), node.description, node.fill?.words, ...parents]
+  return [node.code, sexWords[node.sex].toLowerCase(), node.description, ...parents]
     .filter(Boolean)
     .join(', ');
 }

@@ -1,5 +1,6 @@
 'use client';
 
+import type cytoscapeLibrary from 'cytoscape';
 import type { Core, ElementDefinition } from 'cytoscape';
 import { Maximize, ZoomIn, ZoomOut } from 'lucide-react';
 import { useEffect, useMemo, useRef, useState, type KeyboardEvent } from 'react';
@@ -47,7 +48,7 @@ export function LineageGraph({
 }: LineageGraphProps) {
   const box = useRef<HTMLDivElement>(null);
   const graph = useRef<Core | null>(null);
-  const [ready, setReady] = useState(false);
+  const [drawn, setDrawn] = useState<string | null>(null);
   const matings = useMemo(() => matingsOf(animals, relatedMates), [animals, relatedMates]);
   const byKey = useMemo(() => new Map(animals.map((animal) => [animal.key, animal])), [animals]);
   const callbacks = useRef({ onFocus, onOpen });
@@ -58,6 +59,7 @@ export function LineageGraph({
   const structure =
     matings.map(({ id, young, related }) => `${id}:${young.join()}:${related}`).join(';') +
     animals.map(({ key }) => key).join();
+  const ready = drawn === structure;
   const shown = useRef({ animals, matings, root });
   useEffect(() => {
     shown.current = { animals, matings, root };
@@ -65,7 +67,6 @@ export function LineageGraph({
 
   useEffect(() => {
     let cancelled = false;
-    setReady(false);
     const draw = async () => {
       const [{ default: cytoscape }, { default: dagre }] = await Promise.all([
         import('cytoscape'),
@@ -92,7 +93,7 @@ export function LineageGraph({
       cy.on('dbltap', 'node.animal', ({ target }) => callbacks.current.onOpen(String(target.id())));
       showStart(cy, shown.current.root);
       graph.current = cy;
-      setReady(true);
+      setDrawn(structure);
     };
     void draw();
     return () => {
@@ -197,8 +198,8 @@ export function LineageGraph({
 
 let hasDagre = false;
 function registerDagre(
-  cytoscape: typeof import('cytoscape'),
-  dagre: Parameters<typeof cytoscape.use>[0],
+  cytoscape: typeof cytoscapeLibrary,
+  dagre: Parameters<typeof cytoscapeLibrary.use>[0],
 ): void {
   if (!hasDagre) cytoscape.use(dagre);
   hasDagre = true;
@@ -279,14 +280,23 @@ function colour(cy: Core, container: Element): void {
   );
 }
 
-/** Everything if it can be read then, otherwise the root with its nearest relatives. */
+/** Everything if it can be read then; otherwise the root with its nearest relatives, or the middle of the oldest row. */
 function showStart(cy: Core, root: string | null): void {
   cy.fit(undefined, 30);
   if (cy.zoom() > 1.4) cy.zoom(1.4);
-  if (cy.zoom() < 0.55 && root) {
-    cy.zoom(0.9);
-    cy.center(cy.getElementById(root));
-  } else cy.center();
+  cy.center();
+  if (cy.zoom() >= 0.55) return;
+  const middle = cy.elements().boundingBox();
+  const oldest = cy
+    .nodes('.animal')
+    .sort((a, b) => distance(a.position()) - distance(b.position()))
+    .first();
+  function distance({ x, y }: Point): number {
+    return Math.abs(x - (middle.x1 + middle.x2) / 2) + 4 * (y - middle.y1);
+  }
+  cy.zoom(root ? 0.9 : 0.6);
+  cy.center(root ? cy.getElementById(root) : oldest);
+  if (!root) cy.panBy({ x: 0, y: -cy.height() / 3 });
 }
 
 function zoomBy(cy: Core, factor: number): void {
