@@ -235,7 +235,7 @@ function toAnimal(node: Lineage['nodes'][number]): LineageAnimal {
 }
 
 /** One animal of the graph in words: what the symbol and its lines say. */
-export function sayNode(lineage: Lineage, key: string): string {
+function sayNode(lineage: Lineage, key: string): string {
   const codes = new Map(
     lineage.nodes.map((node) => [node.key, node.shown ? node.code : 'one that is not shown to you']),
   );

@@ -208,7 +208,7 @@ function registerDagre(
 function dataOf(animal: LineageAnimal): NodeData {
   return {
     id: animal.key,
-    label: animal.shown ? animal.code : 'not shown',
+    label: animal.shown ? animal.code : '?',
     sex: animal.sex,
     shows: animal.fill?.shows ?? false,
     carries: animal.fill?.carries ?? 0,

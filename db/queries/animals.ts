@@ -377,13 +377,3 @@ export async function deleteWeight(tx: Transaction, animalId: AnimalId, id: stri
     .returning({ id: weights.id });
   return rows.length === 1;
 }
-
-/** The dams' and sires' codes of many animals, as far as they are seen. */
-export async function codesOf(
-  tx: Transaction,
-  sees: Visibility,
-  ids: readonly AnimalId[],
-): Promise<Map<AnimalId, string>> {
-  const found = await findAnimals(tx, sees, [...new Set(ids)]);
-  return new Map(found.map((row) => [row.id, row.code]));
-}
