@@ -2,7 +2,6 @@ import { sql } from 'drizzle-orm';
 import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uuid, type AnyPgColumn } from 'drizzle-orm/pg-core';
 import type { AccountId, AnimalId, ClutchId, EntryId, ExpenseId, InvoiceId, MemberId, PartyId, PaymentId, ProjectId, RefundId, SettlementId, TermsId } from '@/lib/contracts/ids';
 import type { AccountPurpose, AccountType, EntryCauseKind } from '@/lib/contracts/ledger-kinds';
-import type { SaleSplit } from '@/lib/terms/split-sale';
 import { createdAt, day, minorUnits, moment, tenantPolicy, versionColumn, workspaceColumn } from './columns';
 import { projects, termsVersions } from './projects';
 import { invoices, payments, refunds } from './sales';
@@ -103,7 +102,7 @@ export const saleSplits = pgTable(
     refundId: uuid('refund_id').$type<RefundId>(),
     termsId: uuid('terms_id').$type<TermsId>(),
     entryId: uuid('entry_id').$type<EntryId>().notNull(),
-    split: jsonb('split').$type<SaleSplit>().notNull(),
+    split: jsonb('split').notNull(),
     createdAt: createdAt(),
   },
   (t) => [

@@ -1,7 +1,7 @@
 import { sql } from 'drizzle-orm';
 import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
 import type { AnimalId, MemberId, PartyId, ProjectId, SpeciesId, TermsId } from '@/lib/contracts/ids';
-import type { TermsContent } from '@/lib/terms/terms';
+import type { TermsContent } from '@/lib/contracts/terms-content';
 import { animals } from './collection';
 import { createdAt, day, moment, tenantPolicy, versionColumn, workspaceColumn } from './columns';
 import { species } from './genetics';

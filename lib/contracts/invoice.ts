@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { contract, fileAnswer, inWorkspace, instant, isoDay, minorUnits, pageOf, pageQuery } from './contract';
+import { contract, inWorkspace, instant, isoDay, minorUnits, pageOf, pageQuery } from './contract';
 import { animalId, contactId, invoiceId, paymentId, projectId, refundId } from './ids';
 import { invoiceStatus, listingState, paymentMethod } from './sale-states';
 
@@ -159,18 +159,6 @@ export const createInvoice = contract({
   idempotent: true,
 });
 
-export const sendInvoice = contract({
-  id: 'invoices.send',
-  method: 'POST',
-  path: '/workspaces/{workspace}/invoices/{invoice}/sending',
-  summary: 'Number the invoice and mail the buyer a link to it; sending again mails a new link',
-  access: { scope: 'workspace', action: 'invoice.edit' },
-  params: inInvoice,
-  body: z.object({ version: z.int() }),
-  response: z.object({ number: z.string(), version: z.int() }),
-  idempotent: true,
-});
-
 export const voidInvoice = contract({
   id: 'invoices.void',
   method: 'POST',
@@ -182,58 +170,3 @@ export const voidInvoice = contract({
   response: z.object({ version: z.int() }),
 });
 
-export const deliverInvoice = contract({
-  id: 'invoices.deliver',
-  method: 'POST',
-  path: '/workspaces/{workspace}/invoices/{invoice}/delivery',
-  summary: 'Record the day on which the animals were handed over; they are sold and their parts end',
-  access: { scope: 'workspace', action: 'invoice.edit' },
-  params: inInvoice,
-  body: z.object({ version: z.int(), deliveredOn: isoDay }),
-  response: z.object({ version: z.int() }),
-  idempotent: true,
-});
-
-export const recordPayment = contract({
-  id: 'payments.record',
-  method: 'POST',
-  path: '/workspaces/{workspace}/invoices/{invoice}/payments',
-  summary: 'Record money that came by bank transfer or in cash',
-  access: { scope: 'workspace', action: 'payment.record' },
-  params: inInvoice,
-  body: z.object({
-    method: paymentMethod.exclude(['card']),
-    amount: minorUnits.min(1, 'An amount above zero.'),
-    receivedOn: isoDay,
-    reference: z.string().trim().max(120).default(''),
-  }),
-  response: z.object({ id: paymentId }),
-  idempotent: true,
-});
-
-export const refundPayment = contract({
-  id: 'payments.refund',
-  method: 'POST',
-  path: '/workspaces/{workspace}/invoices/{invoice}/refunds',
-  summary: 'Give money back, in part or in full; a card payment goes back to the card',
-  access: { scope: 'workspace', action: 'payment.refund' },
-  params: inInvoice,
-  body: z.object({
-    paymentId,
-    amount: minorUnits.min(1, 'An amount above zero.'),
-    reason: z.string().trim().min(1, 'Give the reason.').max(500),
-  }),
-  response: z.object({ id: refundId, status: z.enum(['pending', 'succeeded', 'failed']) }),
-  idempotent: true,
-});
-
-export const invoicePdf = contract({
-  id: 'invoices.pdf',
-  method: 'GET',
-  path: '/workspaces/{workspace}/invoices/{invoice}/pdf',
-  summary: 'The invoice as PDF',
-  access: { scope: 'workspace', action: 'invoice.see' },
-  params: inInvoice,
-  response: fileAnswer,
-  produces: 'application/pdf',
-});

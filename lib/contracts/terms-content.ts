@@ -20,7 +20,7 @@ export const termsContent = z.object({
   division: z.enum(['proceeds', 'picks', 'parts']),
   clauses: z.object({ death: clause, exit: clause, notice: clause }),
 });
-export type TermsTerms = z.infer<typeof termsContent>;
+export type TermsContent = z.infer<typeof termsContent>;
 
 /** What a person writes: the parties follow from the project. */
 export const termsDraft = termsContent

@@ -1,6 +1,6 @@
 import type { PartyId } from '@/lib/contracts/ids';
 import type { splitStep } from '@/lib/contracts/terms';
-import type { TermsTerms } from '@/lib/contracts/terms-content';
+import type { TermsContent } from '@/lib/contracts/terms-content';
 import { allocate } from '@/lib/money/allocate';
 import { shareOfBasisPoints } from '@/lib/money/minor-units';
 import type { z } from 'zod';
@@ -22,7 +22,7 @@ const gcd = (a: bigint, b: bigint): bigint => (b === 0n ? a : gcd(b, a % b));
  * Whose the young are: each side's parts go to the owners of that parent by their own parts. The result is whole parts
  * in lowest terms; a side without owners gives nothing.
  */
-export function partsOfYoung({ damSide, sireSide, parties }: TermsTerms, parents: { sire: Parts; dam: Parts }): YoungShare[] {
+export function partsOfYoung({ damSide, sireSide, parties }: TermsContent, parents: { sire: Parts; dam: Parts }): YoungShare[] {
   const total = (parts: Parts) => parts.reduce((sum, one) => sum + one.parts, 0);
   const [ofDam, ofSire] = [total(parents.dam), total(parents.sire)];
   // Over the common denominator (all owners' parts of the dam) × (all of the sire).
@@ -59,7 +59,7 @@ export interface Sale {
  * Cuts a sale step by step: card fee, house share, costs, then each party's part of what is left (largest remainder, odd
  * cents by rank). Each step holds exactly what the step before has left. What is recovered never exceeds what is there.
  */
-export function splitSale(content: TermsTerms, young: readonly YoungShare[], sale: Sale, nameOf: (id: PartyId) => string): SplitStep[] {
+export function splitSale(content: TermsContent, young: readonly YoungShare[], sale: Sale, nameOf: (id: PartyId) => string): SplitStep[] {
   const steps: SplitStep[] = [];
   let left = sale.price;
   const take = (label: string, cuts: SplitStep['cuts']) => {

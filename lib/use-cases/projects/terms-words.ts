@@ -1,12 +1,12 @@
 import type { ClauseLine } from '@/lib/contracts/terms';
-import type { TermsTerms } from '@/lib/contracts/terms-content';
+import type { TermsContent } from '@/lib/contracts/terms-content';
 
-const divisions: Record<TermsTerms['division'], string> = {
+const divisions: Record<TermsContent['division'], string> = {
   proceeds: 'The young are sold and the proceeds are divided.',
   picks: 'The young are picked in turns, in order of rank.',
   parts: 'Each party holds its parts of each of the young.',
 };
-const fees: Record<TermsTerms['cardFees'], string> = {
+const fees: Record<TermsContent['cardFees'], string> = {
   off_the_top: 'Fees of card payments come off the top.',
   house: 'Fees of card payments come out of the house share.',
 };
@@ -15,7 +15,7 @@ const fees: Record<TermsTerms['cardFees'], string> = {
 export const percentOf = (basisPoints: number) => `${String(basisPoints / 100)}%`;
 
 /** Terms clause by clause in words. */
-export function termsWords(content: Omit<TermsTerms, 'parties'> & { parties: readonly { id: string; rank: number }[] }, nameOf: (id: string) => string): { title: string; text: string }[] {
+export function termsWords(content: Omit<TermsContent, 'parties'> & { parties: readonly { id: string; rank: number }[] }, nameOf: (id: string) => string): { title: string; text: string }[] {
   const { damSide, sireSide, houseShare } = content;
   const all = damSide + sireSide;
   const order = [...content.parties].sort((a, b) => a.rank - b.rank).map(({ id }) => nameOf(id));
