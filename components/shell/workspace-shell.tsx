@@ -1,7 +1,7 @@
 'use client';
 
 import { Bug, Egg, FolderOpen, GitFork, Sprout } from 'lucide-react';
-import { usePathname } from 'next/navigation';
+import { usePathname, useRouter } from 'next/navigation';
 import type { ReactNode } from 'react';
 import { auth } from '@/lib/client/auth';
 import { useWorkspace } from '@/lib/client/workspace';
@@ -20,6 +20,7 @@ const places: { path: string; label: string; icon: ReactNode; needs: Action; onP
 export function WorkspaceShell({ children }: { children: ReactNode }) {
   const workspace = useWorkspace();
   const path = usePathname();
+  const router = useRouter();
   const base = `/${workspace.slug}`;
   const parties = new Map(workspace.parties.map((party) => [party.id, party]));
   const shown = places.filter(({ needs }) => workspace.actions.includes(needs));
@@ -39,7 +40,11 @@ export function WorkspaceShell({ children }: { children: ReactNode }) {
       }))}
       workspaces={workspace.workspaces.map(({ slug, name, role }) => ({ href: `/${slug}`, name, role, current: slug === workspace.slug }))}
       user={{ name: workspace.me.name, email: workspace.me.email }}
-      onSignOut={() => void auth.signOut().finally(() => window.location.assign('/sign-in'))}
+      onSignOut={async () => {
+        await auth.signOut();
+        router.replace('/sign-in');
+        router.refresh();
+      }}
     >
       {children}
     </AppShell>

@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm';
-import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uuid } from 'drizzle-orm/pg-core';
 import type { AnimalId, ContactId, InvoiceId, ListingId, MemberId, PaymentId, ProjectId, RefundId } from '@/lib/contracts/ids';
 import type { ContactAddress, ContactEventKind, InvoiceStatus, ListingState, PaymentMethod } from '@/lib/contracts/sale-states';
 import { animals } from './collection';

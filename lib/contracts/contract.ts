@@ -47,7 +47,12 @@ export interface Contract<
 export type Input<C extends Contract> = { params: z.output<C['params']>; query: z.output<C['query']>; body: z.output<C['body']> };
 export type Answer<C extends Contract> = z.output<C['response']>;
 
-type Optional<Key extends string, T> = undefined extends T ? { [K in Key]?: T } : {} extends T ? { [K in Key]?: T } : { [K in Key]: T };
+type Nothing = Record<never, never>;
+type Optional<Key extends string, T> = undefined extends T
+  ? { [K in Key]?: T }
+  : Nothing extends T
+    ? { [K in Key]?: T }
+    : { [K in Key]: T };
 /** What a caller hands over: parts that may be empty can be left out. */
 export type Request<C extends Contract> = Optional<'params', z.input<C['params']>> &
   Optional<'query', z.input<C['query']>> &

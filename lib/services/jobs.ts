@@ -5,11 +5,9 @@ import { log } from './log';
 
 /** Work that is done outside of a request, with what it needs to know. */
 export interface JobData {
-  'mail.send': { mailId: string };
+  'mail.send': { mailId: string; workspaceId: string | null };
   /** Puts mail whose job was lost (a crash between commit and hand-over) back in line. */
   'mail.sweep': Record<string, never>;
-  /** Once a day: follow-ups and instalments that are due. */
-  'reminders.daily': Record<string, never>;
 }
 export type JobName = keyof JobData;
 
@@ -19,7 +17,7 @@ export interface JobQueue {
 
 export type JobHandlers = { [Name in JobName]: (data: JobData[Name]) => Promise<void> };
 
-const names: JobName[] = ['mail.send', 'mail.sweep', 'reminders.daily'];
+const names: JobName[] = ['mail.send', 'mail.sweep'];
 const retry = { retryLimit: 8, retryDelay: 2, retryBackoff: true };
 
 const kept = globalThis as { moietyJobs?: Promise<PgBoss> };
@@ -53,7 +51,6 @@ export async function startWorking(handlers: JobHandlers): Promise<void> {
     });
   }
   await boss.schedule('mail.sweep', '* * * * *');
-  await boss.schedule('reminders.daily', '0 6 * * *');
 }
 
 /** Stops working and lets running jobs finish; for the end of the process and for tests. */

@@ -20,5 +20,5 @@ export async function queueMail<Template extends MailTemplate>(
     subject: subjectOf(mail.template, mail.data),
     data: { ...mail.data },
   });
-  afterCommit(tx, () => services.jobs.send('mail.send', { mailId }));
+  afterCommit(tx, () => services.jobs.send('mail.send', { mailId, workspaceId: mail.workspaceId }));
 }

@@ -1,12 +1,10 @@
 import 'server-only';
 import type { JobHandlers } from '@/lib/services/jobs';
-import { sendDueReminders } from './send-due-reminders';
 import { sendMail } from './send-mail';
 import { sweepMail } from './sweep-mail';
 
 /** What the process does for each kind of job. */
 export const jobHandlers: JobHandlers = {
-  'mail.send': ({ mailId }) => sendMail(mailId),
+  'mail.send': sendMail,
   'mail.sweep': () => sweepMail(),
-  'reminders.daily': () => sendDueReminders(),
 };

@@ -1,13 +1,13 @@
 import type { VersionChange } from '@/lib/contracts/agreement';
 import type { PairingFigures, PairingPlan } from '@/lib/contracts/pairing-figures';
-import type { TermsTerms } from '@/lib/contracts/terms-content';
+import type { TermsContent } from '@/lib/contracts/terms-content';
 import { formatMoney } from '@/lib/money/minor-units';
 import { compareClauses, termsWords } from '../projects/terms-words';
 
 interface ComparedVersion {
   plan: PairingPlan;
   figures: PairingFigures;
-  terms: TermsTerms | undefined;
+  terms: TermsContent | undefined;
 }
 
 /** What differs between two versions of a pairing, as the parties look at it. Money only for who may see it. */

@@ -1,13 +1,13 @@
 import type { PartyId } from '@/lib/contracts/ids';
 import type { PairingFigures } from '@/lib/contracts/pairing-figures';
-import type { TermsTerms } from '@/lib/contracts/terms-content';
+import type { TermsContent } from '@/lib/contracts/terms-content';
 import { partsOfYoung, splitSale } from '../projects/split-by-terms';
 
 type Parts = readonly { partyId: PartyId; parts: number }[];
 
 /** Whose the young and the expected proceeds of a pairing would be, as the parties see it before they answer. */
 export function splitByTerms(
-  content: TermsTerms,
+  content: TermsContent,
   parents: { sire: Parts; dam: Parts },
   expected: number,
   parties: readonly { id: PartyId; name: string }[],

@@ -24,9 +24,9 @@ export async function findRoutes(): Promise<FoundRoute[]> {
     .sort();
   const found: FoundRoute[] = [];
   for (const file of files) {
-    const module = (await import(path.join(root, file))) as Record<string, RouteHandler>;
+    const bound = (await import(path.join(root, file))) as Record<string, RouteHandler>;
     for (const method of ['GET', 'POST', 'PUT', 'PATCH', 'DELETE']) {
-      const handler = module[method];
+      const handler = bound[method];
       if (handler) found.push({ name: `${method} ${pathOf(file)}`, file, handler, contract: handler.contract });
     }
   }
