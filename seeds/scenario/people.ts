@@ -16,7 +16,13 @@ export interface DemoPerson {
   what: string;
 }
 
-function person(key: string, name: string, role: DemoPerson['role'], mark: number | null, what: string): DemoPerson {
+function person(
+  key: string,
+  name: string,
+  role: DemoPerson['role'],
+  mark: number | null,
+  what: string,
+): DemoPerson {
   return {
     key,
     userId: `demo-${key}` as UserId,
@@ -30,12 +36,42 @@ function person(key: string, name: string, role: DemoPerson['role'], mark: numbe
   };
 }
 
-export const maren = person('maren', 'Maren Oyelowo', 'owner', 0, 'runs the Kilnhouse and holds parts in both projects');
-export const tobias = person('tobias', 'Tobias Wrenfield', 'partner', 1, 'partner in both projects; two proposals wait for an answer');
+export const maren = person(
+  'maren',
+  'Maren Oyelowo',
+  'owner',
+  0,
+  'runs the Kilnhouse and holds parts in both projects',
+);
+export const tobias = person(
+  'tobias',
+  'Tobias Wrenfield',
+  'partner',
+  1,
+  'partner in both projects; two proposals wait for an answer',
+);
 export const ilse = person('ilse', 'Ilse Achterdal', 'partner', 2, 'partner in the Ember pieds only');
-export const ravi = person('ravi', 'Ravi Quillon', 'keeper', null, 'does the daily work: logs, clutches and hatchlings, no prices');
-export const gwen = person('gwen', 'Gwen Farthingale', 'accountant', null, 'checks the ledger, closes periods, exports');
-export const buyer = person('nadia', 'Nadia Verhoeven', 'buyer', null, 'bought an animal; signs in with a link by mail');
+export const ravi = person(
+  'ravi',
+  'Ravi Quillon',
+  'keeper',
+  null,
+  'does the daily work: logs, clutches and hatchlings, no prices',
+);
+export const gwen = person(
+  'gwen',
+  'Gwen Farthingale',
+  'accountant',
+  null,
+  'checks the ledger, closes periods, exports',
+);
+export const buyer = person(
+  'nadia',
+  'Nadia Verhoeven',
+  'buyer',
+  null,
+  'bought an animal; signs in with a link by mail',
+);
 
 export const members = [maren, tobias, ilse, ravi, gwen];
 export const partners = [maren, tobias, ilse];
