@@ -3,9 +3,13 @@ import { closeDatabase } from '@/db/connection';
 import { setClock } from '@/lib/services/clock';
 import { stopWorking } from '@/lib/services/jobs';
 import { addAnimals } from './scenario/collection';
+import { addContacts, settleMails } from './scenario/contacts';
 import { addAccounts, addHouse, addTubs, isHouseThere } from './scenario/house';
-import { adults } from './scenario/lineage';
+import { adults, bp0, cs0, youngOf } from './scenario/lineage';
 import { buyer, demoPassword, members } from './scenario/people';
+import { addPhotos } from './scenario/photos';
+import { addProjects } from './scenario/projects';
+import { addSeason } from './scenario/season';
 import { addSpecies } from './scenario/species';
 
 /** Sows the demo scenario; does nothing when it is there already. */
@@ -16,6 +20,13 @@ async function sow(now: Date): Promise<string> {
   await addSpecies();
   const tubs = await addTubs();
   await addAnimals(adults, tubs.adult, now);
+  await addProjects(now);
+  await addSeason(now, tubs.hatchling);
+  setClock(null);
+  await addContacts(now);
+  const hatchlings = [...youngOf.values()].flatMap((clutch) => clutch.slice(0, 4));
+  await addPhotos([...bp0, ...cs0.slice(0, 4), ...hatchlings], now);
+  await settleMails(now);
   return 'The Kilnhouse is sown.';
 }
 
