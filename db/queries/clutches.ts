@@ -1,5 +1,20 @@
 import 'server-only';
-import { and, asc, count, desc, eq, gte, ilike, isNotNull, isNull, like, lt, or, sql, type SQL } from 'drizzle-orm';
+import {
+  and,
+  asc,
+  count,
+  desc,
+  eq,
+  gte,
+  ilike,
+  isNotNull,
+  isNull,
+  like,
+  lt,
+  or,
+  sql,
+  type SQL,
+} from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import type { AnimalId, ClutchId, ProjectId, TermsId } from '@/lib/contracts/ids';
 import type { Transaction } from '../scope';
@@ -12,6 +27,9 @@ import { inVisibleProject, type Visibility } from './visibility';
 const sires = alias(animals, 'sires');
 const dams = alias(animals, 'dams');
 const young = sql<number>`(select count(*)::int from animals y where y.workspace_id = ${clutches.workspaceId} and y.clutch_id = ${clutches.id})`;
+
+/** The first day on which an egg may pip. */
+const pipsFrom = sql`(${clutches.laidOn} + (select (s.profile->'intervals'->'incubation'->>'from')::int from species s where s.workspace_id = ${dams.workspaceId} and s.id = ${dams.speciesId}))`;
 
 const columns = {
   id: clutches.id,
@@ -43,8 +61,14 @@ function selectClutches(tx: Transaction) {
   return tx
     .select(columns)
     .from(clutches)
-    .innerJoin(pairings, and(eq(pairings.workspaceId, clutches.workspaceId), eq(pairings.id, clutches.pairingId)))
-    .innerJoin(projects, and(eq(projects.workspaceId, clutches.workspaceId), eq(projects.id, clutches.projectId)))
+    .innerJoin(
+      pairings,
+      and(eq(pairings.workspaceId, clutches.workspaceId), eq(pairings.id, clutches.pairingId)),
+    )
+    .innerJoin(
+      projects,
+      and(eq(projects.workspaceId, clutches.workspaceId), eq(projects.id, clutches.projectId)),
+    )
     .innerJoin(sires, and(eq(sires.workspaceId, pairings.workspaceId), eq(sires.id, pairings.sireId)))
     .innerJoin(dams, and(eq(dams.workspaceId, pairings.workspaceId), eq(dams.id, pairings.damId)))
     .innerJoin(species, and(eq(species.workspaceId, dams.workspaceId), eq(species.id, dams.speciesId)));
@@ -56,29 +80,50 @@ export interface ClutchFilter {
   state?: 'incubating' | 'hatching' | 'hatched' | 'lost';
   project?: ProjectId;
   season?: number;
+  /** Tells incubating from hatching. */
+  today: string;
 }
 
 function matches(filter: ClutchFilter): (SQL | undefined)[] {
-  const { search, state, project, season } = filter;
+  const { search, state, project, season, today } = filter;
   const text = search ? `%${search.replace(/[%_\\]/g, '\\$&')}%` : null;
   return [
     text ? or(ilike(clutches.code, text), ilike(sires.code, text), ilike(dams.code, text)) : undefined,
     state === 'hatched' ? isNotNull(clutches.hatchedOn) : undefined,
-    state === 'incubating' || state === 'hatching' ? and(isNull(clutches.hatchedOn), sql`${clutches.eggs} > 0`) : undefined,
+    state === 'incubating'
+      ? and(isNull(clutches.hatchedOn), sql`${clutches.eggs} > 0 and ${pipsFrom} > ${today}::date`)
+      : undefined,
+    state === 'hatching'
+      ? and(isNull(clutches.hatchedOn), sql`${clutches.eggs} > 0 and ${pipsFrom} <= ${today}::date`)
+      : undefined,
     state === 'lost' ? and(isNull(clutches.hatchedOn), sql`${clutches.eggs} = 0`) : undefined,
     project ? eq(clutches.projectId, project) : undefined,
-    season ? and(gte(clutches.laidOn, `${season}-01-01`), lt(clutches.laidOn, `${season + 1}-01-01`)) : undefined,
+    season
+      ? and(gte(clutches.laidOn, `${season}-01-01`), lt(clutches.laidOn, `${season + 1}-01-01`))
+      : undefined,
   ];
 }
 
 /** Clutches that are seen and match, newest first, and how many match in all. */
-export async function listClutchRecords(tx: Transaction, sees: Visibility, filter: ClutchFilter, page: { offset: number; limit: number }) {
+export async function listClutchRecords(
+  tx: Transaction,
+  sees: Visibility,
+  filter: ClutchFilter,
+  page: { offset: number; limit: number },
+) {
   const where = and(inVisibleProject(sees, clutches.projectId), ...matches(filter));
-  const rows = await selectClutches(tx).where(where).orderBy(desc(clutches.laidOn), asc(clutches.code)).limit(page.limit).offset(page.offset);
+  const rows = await selectClutches(tx)
+    .where(where)
+    .orderBy(desc(clutches.laidOn), asc(clutches.code))
+    .limit(page.limit)
+    .offset(page.offset);
   const [total] = await tx
     .select({ total: count() })
     .from(clutches)
-    .innerJoin(pairings, and(eq(pairings.workspaceId, clutches.workspaceId), eq(pairings.id, clutches.pairingId)))
+    .innerJoin(
+      pairings,
+      and(eq(pairings.workspaceId, clutches.workspaceId), eq(pairings.id, clutches.pairingId)),
+    )
     .innerJoin(sires, and(eq(sires.workspaceId, pairings.workspaceId), eq(sires.id, pairings.sireId)))
     .innerJoin(dams, and(eq(dams.workspaceId, pairings.workspaceId), eq(dams.id, pairings.damId)))
     .where(where);
@@ -86,7 +131,9 @@ export async function listClutchRecords(tx: Transaction, sees: Visibility, filte
 }
 
 export async function findClutch(tx: Transaction, sees: Visibility, id: ClutchId) {
-  const [row] = await selectClutches(tx).where(and(eq(clutches.id, id), inVisibleProject(sees, clutches.projectId)));
+  const [row] = await selectClutches(tx).where(
+    and(eq(clutches.id, id), inVisibleProject(sees, clutches.projectId)),
+  );
   return row ?? null;
 }
 
@@ -102,7 +149,12 @@ export async function insertClutch(tx: Transaction, row: typeof clutches.$inferI
 }
 
 /** @returns whether the row still had the version that was seen */
-export async function updateClutch(tx: Transaction, id: ClutchId, seen: number, change: Partial<typeof clutches.$inferInsert>): Promise<boolean> {
+export async function updateClutch(
+  tx: Transaction,
+  id: ClutchId,
+  seen: number,
+  change: Partial<typeof clutches.$inferInsert>,
+): Promise<boolean> {
   const rows = await tx
     .update(clutches)
     .set({ ...change, version: seen + 1 })
@@ -114,16 +166,30 @@ export async function updateClutch(tx: Transaction, id: ClutchId, seen: number, 
 export async function setHatched(tx: Transaction, id: ClutchId, hatchedOn: string): Promise<void> {
   await tx
     .update(clutches)
-    .set({ hatchedOn: sql`least(coalesce(${clutches.hatchedOn}, ${hatchedOn}::date), ${hatchedOn}::date)`, version: sql`${clutches.version} + 1` })
+    .set({
+      hatchedOn: sql`least(coalesce(${clutches.hatchedOn}, ${hatchedOn}::date), ${hatchedOn}::date)`,
+      version: sql`${clutches.version} + 1`,
+    })
     .where(eq(clutches.id, id));
 }
 
 /** The terms of a project in force on a day: the newest agreed version whose day has come. */
 export async function findTermsInForce(tx: Transaction, projectId: ProjectId, onDay: string) {
   const [row] = await tx
-    .select({ id: termsVersions.id, number: termsVersions.number, content: termsVersions.content, inForceFrom: termsVersions.inForceFrom })
+    .select({
+      id: termsVersions.id,
+      number: termsVersions.number,
+      content: termsVersions.content,
+      inForceFrom: termsVersions.inForceFrom,
+    })
     .from(termsVersions)
-    .where(and(eq(termsVersions.projectId, projectId), eq(termsVersions.status, 'agreed'), sql`${termsVersions.inForceFrom} <= ${onDay}::date`))
+    .where(
+      and(
+        eq(termsVersions.projectId, projectId),
+        eq(termsVersions.status, 'agreed'),
+        sql`${termsVersions.inForceFrom} <= ${onDay}::date`,
+      ),
+    )
     .orderBy(desc(termsVersions.inForceFrom), desc(termsVersions.number))
     .limit(1);
   return row ?? null;
@@ -131,7 +197,12 @@ export async function findTermsInForce(tx: Transaction, projectId: ProjectId, on
 
 export async function findTermsById(tx: Transaction, id: TermsId) {
   const [row] = await tx
-    .select({ id: termsVersions.id, number: termsVersions.number, content: termsVersions.content, inForceFrom: termsVersions.inForceFrom })
+    .select({
+      id: termsVersions.id,
+      number: termsVersions.number,
+      content: termsVersions.content,
+      inForceFrom: termsVersions.inForceFrom,
+    })
     .from(termsVersions)
     .where(eq(termsVersions.id, id));
   return row ?? null;
@@ -142,7 +213,13 @@ export async function partsOn(tx: Transaction, animalId: AnimalId, onDay: string
   return tx
     .select({ partyId: ownershipParts.partyId, parts: ownershipParts.parts })
     .from(ownerships)
-    .innerJoin(ownershipParts, and(eq(ownershipParts.workspaceId, ownerships.workspaceId), eq(ownershipParts.ownershipId, ownerships.id)))
+    .innerJoin(
+      ownershipParts,
+      and(
+        eq(ownershipParts.workspaceId, ownerships.workspaceId),
+        eq(ownershipParts.ownershipId, ownerships.id),
+      ),
+    )
     .where(
       and(
         eq(ownerships.animalId, animalId),
@@ -162,7 +239,9 @@ export async function listYoung(tx: Transaction, clutchId: ClutchId) {
       sex: animals.sex,
       status: animals.status,
       note: animals.notes,
-      grams: sql<number | null>`(select w.grams from ${weights} w where w.workspace_id = ${animals.workspaceId} and w.animal_id = ${animals.id} order by w.weighed_on desc, w.id limit 1)`,
+      grams: sql<
+        number | null
+      >`(select w.grams from ${weights} w where w.workspace_id = animals.workspace_id and w.animal_id = animals.id order by w.weighed_on desc, w.id limit 1)`,
     })
     .from(animals)
     .where(eq(animals.clutchId, clutchId))
@@ -170,12 +249,23 @@ export async function listYoung(tx: Transaction, clutchId: ClutchId) {
   const parts = await tx
     .select({ animalId: ownerships.animalId, partyId: ownershipParts.partyId, parts: ownershipParts.parts })
     .from(ownerships)
-    .innerJoin(ownershipParts, and(eq(ownershipParts.workspaceId, ownerships.workspaceId), eq(ownershipParts.ownershipId, ownerships.id)))
-    .innerJoin(animals, and(eq(animals.workspaceId, ownerships.workspaceId), eq(animals.id, ownerships.animalId)))
+    .innerJoin(
+      ownershipParts,
+      and(
+        eq(ownershipParts.workspaceId, ownerships.workspaceId),
+        eq(ownershipParts.ownershipId, ownerships.id),
+      ),
+    )
+    .innerJoin(
+      animals,
+      and(eq(animals.workspaceId, ownerships.workspaceId), eq(animals.id, ownerships.animalId)),
+    )
     .where(and(eq(animals.clutchId, clutchId), isNull(ownerships.untilDay)));
   return rows.map((row) => ({
     ...row,
-    parts: parts.filter(({ animalId }) => animalId === row.id).map(({ partyId, parts: held }) => ({ partyId, parts: held })),
+    parts: parts
+      .filter(({ animalId }) => animalId === row.id)
+      .map(({ partyId, parts: held }) => ({ partyId, parts: held })),
   }));
 }
 
@@ -196,4 +286,3 @@ export async function clutchCodesStartingWith(tx: Transaction, start: string): P
     .where(like(clutches.code, `${start.replace(/[%_\\]/g, '\\$&')}%`));
   return rows.map((row) => row.code);
 }
-

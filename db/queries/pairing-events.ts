@@ -30,7 +30,10 @@ function selectEvents(tx: Transaction) {
   return tx
     .select(eventColumns)
     .from(pairingEvents)
-    .innerJoin(members, and(eq(members.workspaceId, pairingEvents.workspaceId), eq(members.id, pairingEvents.recordedBy)))
+    .innerJoin(
+      members,
+      and(eq(members.workspaceId, pairingEvents.workspaceId), eq(members.id, pairingEvents.recordedBy)),
+    )
     .innerJoin(users, eq(users.id, members.userId));
 }
 
@@ -42,11 +45,16 @@ export async function listEventsOfPairing(tx: Transaction, pairingId: PairingId)
 }
 
 export async function findPairingEvent(tx: Transaction, pairingId: PairingId, id: string) {
-  const [row] = await selectEvents(tx).where(and(eq(pairingEvents.pairingId, pairingId), eq(pairingEvents.id, id)));
+  const [row] = await selectEvents(tx).where(
+    and(eq(pairingEvents.pairingId, pairingId), eq(pairingEvents.id, id)),
+  );
   return row ?? null;
 }
 
-export async function insertPairingEvent(tx: Transaction, row: typeof pairingEvents.$inferInsert): Promise<string> {
+export async function insertPairingEvent(
+  tx: Transaction,
+  row: typeof pairingEvents.$inferInsert,
+): Promise<string> {
   const id = crypto.randomUUID();
   await tx.insert(pairingEvents).values({ ...row, id });
   return id;

@@ -172,7 +172,9 @@ export const editClutch = contract({
   summary: 'Correct or add to what is recorded of a clutch',
   access: { scope: 'workspace', action: 'clutch.log' },
   params: inClutch,
-  body: z.object({ ...clutchFields, version: z.int() }).refine(({ eggs, slugs }) => eggs + slugs > 0, eggsOrSlugs),
+  body: z
+    .object({ ...clutchFields, version: z.int() })
+    .refine(({ eggs, slugs }) => eggs + slugs > 0, eggsOrSlugs),
   response: z.object({ version: z.int() }),
 });
 

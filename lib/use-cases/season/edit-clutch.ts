@@ -12,13 +12,22 @@ export const editClutchUseCase = workspaceUseCase(editClutch, async (world, { pa
   if (!clutch) throw notFound('clutch');
   const { version, ...fields } = body;
   if (fields.laidOn > today) throw invalid('laidOn', 'This day has not come yet.');
-  if (clutch.hatchedOn && fields.laidOn >= clutch.hatchedOn) throw invalid('laidOn', 'It hatched before this day.');
-  if (fields.eggs < clutch.hatchlings) throw invalid('eggs', `${clutch.hatchlings} young are logged; there were at least as many eggs.`);
+  if (clutch.hatchedOn && fields.laidOn >= clutch.hatchedOn)
+    throw invalid('laidOn', 'It hatched before this day.');
+  if (fields.eggs < clutch.hatchlings)
+    throw invalid('eggs', `${clutch.hatchlings} young are logged; there were at least as many eggs.`);
   const terms = await findTermsById(tx, clutch.termsId);
   if (terms && fields.laidOn < terms.inForceFrom) {
-    throw invalid('laidOn', `The clutch stands under terms version ${terms.number}, in force from ${terms.inForceFrom}.`);
+    throw invalid(
+      'laidOn',
+      `The clutch stands under terms version ${terms.number}, in force from ${terms.inForceFrom}.`,
+    );
   }
   if (!(await updateClutch(tx, clutch.id, version, fields))) throw stale('clutch', clutch.version);
-  await recordAudit(world, { action: 'clutch.edit', subject: { kind: 'clutch', id: clutch.id }, detail: fields });
+  await recordAudit(world, {
+    action: 'clutch.edit',
+    subject: { kind: 'clutch', id: clutch.id },
+    detail: fields,
+  });
   return { version: version + 1 };
 });

@@ -14,7 +14,11 @@ export const retractPairingEventUseCase = workspaceUseCase(retractPairingEvent, 
   if (!pairing || !row) throw notFound('entry');
   if (!row.retractedAt) {
     await markPairingEventRetracted(tx, row.id, now);
-    await recordAudit(world, { action: 'pairing.log.retract', subject: { kind: 'pairing', id: pairing.id }, detail: { kind: row.kind, seenOn: row.seenOn } });
+    await recordAudit(world, {
+      action: 'pairing.log.retract',
+      subject: { kind: 'pairing', id: pairing.id },
+      detail: { kind: row.kind, seenOn: row.seenOn },
+    });
   }
   return presentPairingEvent({ ...row, retractedAt: row.retractedAt ?? now });
 });
