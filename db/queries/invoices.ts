@@ -1,6 +1,6 @@
 import 'server-only';
 import { and, asc, count, desc, eq, ilike, inArray, or, sql, type SQL } from 'drizzle-orm';
-import type { AnimalId, InvoiceId, PaymentId } from '@/lib/contracts/ids';
+import type { AnimalId, InvoiceId } from '@/lib/contracts/ids';
 import type { InvoiceStatus } from '@/lib/contracts/sale-states';
 import type { Transaction } from '../scope';
 import { animals } from '../schema/collection';
@@ -72,12 +72,6 @@ export async function findInvoice(tx: Transaction, sees: Visibility, id: Invoice
   return row ?? null;
 }
 
-/** Locks an invoice for the rest of the transaction: payments and refunds of one invoice happen one after another. */
-export async function lockInvoice(tx: Transaction, id: InvoiceId) {
-  const [row] = await tx.select().from(invoices).where(eq(invoices.id, id)).for('update');
-  return row ?? null;
-}
-
 export async function listLines(tx: Transaction, invoiceIds: InvoiceId[]) {
   if (invoiceIds.length === 0) return [];
   return tx
@@ -131,17 +125,6 @@ export async function updateInvoice(tx: Transaction, id: InvoiceId, seen: number
     .where(and(eq(invoices.id, id), eq(invoices.version, seen)))
     .returning({ id: invoices.id });
   return rows.length === 1;
-}
-
-export async function insertPayment(tx: Transaction, row: typeof payments.$inferInsert): Promise<PaymentId> {
-  const id = crypto.randomUUID() as PaymentId;
-  await tx.insert(payments).values({ ...row, id });
-  return id;
-}
-
-export async function findPaymentByIntent(tx: Transaction, intentId: string) {
-  const [row] = await tx.select().from(payments).where(eq(payments.intentId, intentId));
-  return row ?? null;
 }
 
 /** Whether an animal already stands on an invoice that is neither void nor refunded. */

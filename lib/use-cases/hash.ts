@@ -6,8 +6,3 @@ import { canonicalJson } from './canonical-json';
 export function chainHash(previous: string | null, content: unknown): string {
   return createHash('sha256').update(previous ?? '').update('\n').update(canonicalJson(content)).digest('hex');
 }
-
-/** SHA-256 (hex) of a link's secret; only this is kept. */
-export function hashSecret(secret: string): string {
-  return createHash('sha256').update(secret).digest('hex');
-}

@@ -19,8 +19,8 @@ export async function startServer(): Promise<void> {
   process.once('SIGTERM', () => void stopWorking());
 }
 
-/** Lets the sign-in send its mails through the queue; also used by seeds and tests. */
-export function connectSignInMail(): void {
+/** Lets the sign-in send its mails through the queue. */
+function connectSignInMail(): void {
   setSignInMail(async (template, to, data) => {
     const later = await withScope({}, async (tx) => {
       await queueMail({ tx, services: { jobs: jobQueue } }, { workspaceId: null, template, to, data });

@@ -66,8 +66,3 @@ export function workspaceUseCase<C extends Contract>(contract: C, run: Run<Works
 export function personUseCase<C extends Contract>(contract: C, run: Run<PersonWorld, C>): UseCase<C> {
   return { contract, scope: 'person', run };
 }
-
-/** One thing that anybody can do, usually with a secret from a link. */
-export function publicUseCase<C extends Contract>(contract: C, run: Run<VisitorWorld, C>): UseCase<C> {
-  return { contract, scope: 'public', run };
-}
