@@ -3,7 +3,7 @@ import { closeDatabase } from '@/db/connection';
 import { setClock } from '@/lib/services/clock';
 import { stopWorking } from '@/lib/services/jobs';
 import { addAnimals } from './scenario/collection';
-import { addContacts, settleMails } from './scenario/contacts';
+import { addContacts } from './scenario/contacts';
 import { addAccounts, addHouse, addTubs, isHouseThere } from './scenario/house';
 import { adults, bp0, cs0, youngOf } from './scenario/lineage';
 import { buyer, demoPassword, members } from './scenario/people';
@@ -26,7 +26,6 @@ async function sow(now: Date): Promise<string> {
   await addContacts(now);
   const hatchlings = [...youngOf.values()].flatMap((clutch) => clutch.slice(0, 4));
   await addPhotos([...bp0, ...cs0.slice(0, 4), ...hatchlings], now);
-  await settleMails(now);
   return 'The Kilnhouse is sown.';
 }
 

@@ -43,10 +43,10 @@ async function own(tx: Transaction, animal: Simulated, now: Date): Promise<void>
     return;
   }
   const derivation =
-    animal.dam && animal.sire
+    animal.generation > 1 && animal.dam && animal.sire
       ? [`Dam ${animal.dam.code} and sire ${animal.sire.code}: each side's parts go to that parent's owners.`]
       : null;
-  await keep('now', animal.parts, { reason: animal.dam ? 'hatched' : 'founding', derivation });
+  await keep('now', animal.parts, { reason: derivation ? 'hatched' : 'founding', derivation });
 }
 
 function gramsAt(animal: Simulated, ageDays: number): number {

@@ -1,5 +1,3 @@
-import { eq } from 'drizzle-orm';
-import { mails } from '@/db/schema/activity';
 import { contactEvents, contacts } from '@/db/schema/sales';
 import { withScope } from '@/db/scope';
 import { addDays } from 'date-fns';
@@ -93,11 +91,4 @@ export async function addContacts(now: Date): Promise<void> {
       }
     }
   });
-}
-
-/** What the agreements of the past would have mailed is marked as sent: nobody is to get it now. */
-export async function settleMails(now: Date): Promise<void> {
-  await withScope({ workspaceId }, (tx) =>
-    tx.update(mails).set({ status: 'sent', sentAt: now }).where(eq(mails.workspaceId, workspaceId)),
-  );
 }

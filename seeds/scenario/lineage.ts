@@ -73,11 +73,12 @@ export function ofSex(animals: readonly Simulated[], sex: 'male' | 'female', ind
   return one;
 }
 
+/** Young of a pair; `owners` where they hatched before the project and were shared out by hand. */
 function breed(
   pair: { dam: Simulated; sire: Simulated },
   count: number,
   hatched: number,
-  clutchCode?: string,
+  { clutchCode, owners }: { clutchCode?: string; owners?: Parts } = {},
 ): Simulated[] {
   const { dam, sire } = pair;
   const rule = dam.species === pythons ? sides.pythons : sides.corns;
@@ -91,7 +92,7 @@ function breed(
       name: '',
       species: dam.species,
       hatched,
-      parts: partsOfYoung(dam.parts, sire.parts, rule),
+      parts: owners ?? partsOfYoung(dam.parts, sire.parts, rule),
       generation: Math.max(dam.generation, sire.generation) + 1,
       dam,
       sire,
@@ -114,8 +115,8 @@ export const finished = {
 
 export const bp0 = found(pythons, pythonFounders, -3200);
 export const bp1 = [
-  ...breed({ dam: at(bp0, 1), sire: at(bp0, 0) }, 4, -2150),
-  ...breed({ dam: at(bp0, 2), sire: at(bp0, 4) }, 4, -2140),
+  ...breed({ dam: at(bp0, 1), sire: at(bp0, 0) }, 4, -2150, { owners: parts([maren, 1], [tobias, 1]) }),
+  ...breed({ dam: at(bp0, 2), sire: at(bp0, 4) }, 4, -2140, { owners: parts([maren, 1], [ilse, 1]) }),
 ];
 export const bp2 = [
   ...breed({ dam: ofSex(bp1.slice(4), 'female'), sire: ofSex(bp1.slice(0, 4), 'male') }, 5, -1080),
@@ -123,8 +124,8 @@ export const bp2 = [
 ];
 export const cs0 = found(corns, cornFounders, -2900);
 export const cs1 = [
-  ...breed({ dam: at(cs0, 1), sire: at(cs0, 0) }, 4, -2000),
-  ...breed({ dam: at(cs0, 2), sire: at(cs0, 3) }, 4, -1990),
+  ...breed({ dam: at(cs0, 1), sire: at(cs0, 0) }, 4, -2000, { owners: parts([tobias, 1]) }),
+  ...breed({ dam: at(cs0, 2), sire: at(cs0, 3) }, 4, -1990, { owners: parts([maren, 1], [tobias, 1]) }),
 ];
 export const cs2 = breed(
   { dam: ofSex(cs1.slice(4), 'female'), sire: ofSex(cs1.slice(0, 4), 'male') },
@@ -168,5 +169,8 @@ export const pastPairs = [
 
 export const adults = [...bp0, ...bp1, ...bp2, ...cs0, ...cs1, ...cs2];
 export const youngOf = new Map(
-  pastPairs.map((pair) => [pair.key, breed(pair, pair.young, pair.days.hatched, pair.clutchCode)]),
+  pastPairs.map((pair) => [
+    pair.key,
+    breed(pair, pair.young, pair.days.hatched, { clutchCode: pair.clutchCode }),
+  ]),
 );

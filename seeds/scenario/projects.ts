@@ -10,6 +10,7 @@ import { identify } from '../identify';
 import { animalIdOf } from './collection';
 import { housePartyId, slug, workspaceId } from './house';
 import { bp0, bp1, bp2, cs0, cs1, cs2, sides } from './lineage';
+import { dateNotices } from './notices';
 import { ilse, maren, tobias, type DemoPerson } from './people';
 import { callerOf, liveAt } from './live-at';
 import type { Simulated } from './simulate';
@@ -112,5 +113,6 @@ export async function addProjects(now: Date): Promise<void> {
         body: { decision: 'agreed' },
       });
     }
+    await dateNotices(now, STARTED, true);
   }
 }

@@ -11,8 +11,9 @@ import { perform } from '@/lib/use-cases/perform';
 import { dayFromNow } from '../calendar';
 import { addAnimals, animalIdOf, clutchIdOf } from './collection';
 import { slug, workspaceId } from './house';
-import { bp0, bp1, bp2, cs0, cs1, cs2, ofSex, pastPairs, youngOf } from './lineage';
+import { bp0, bp1, bp2, cs0, cs2, ofSex, pastPairs, youngOf } from './lineage';
 import { callerOf, liveAt } from './live-at';
+import { dateNotices } from './notices';
 import { maren, ravi, tobias, type DemoPerson } from './people';
 import { ember, loft, type SownProject } from './projects';
 import type { Simulated } from './simulate';
@@ -64,6 +65,7 @@ async function propose(plan: Plan, now: Date): Promise<PairingId> {
       body: { kind, seenOn: dayFromNow(now, day), minutes: minutes ?? null },
     });
   }
+  await dateNotices(now, proposedOn, plan.waits === undefined);
   return id;
 }
 
@@ -206,7 +208,7 @@ function currentPlans(): Plan[] {
       ...corn,
       key: 'loft 2',
       sire: ofSex(cs2, 'male'),
-      dam: ofSex(cs1.slice(4), 'female'),
+      dam: named(cs0, 'Eave'),
       starts: 14,
       ends: 44,
       waits: tobias,
