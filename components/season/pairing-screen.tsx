@@ -3,6 +3,7 @@
 import Link from 'next/link';
 import { parseAsString, useQueryState } from 'nuqs';
 import { useEffect, useRef, useState } from 'react';
+import { PairingLog } from '@/components/clutches/pairing-log';
 import { PageBody } from '@/components/shell/page-body';
 import { PageHeader } from '@/components/shell/page-header';
 import { Badge } from '@/components/ui/badge';
@@ -154,6 +155,7 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
               </Panel>
             ) : null}
             <PairingProgress pairing={pairing} />
+            {pairing.status === 'agreed' ? <PairingLog pairing={pairing.id} /> : null}
           </div>
           <div className="flex min-w-0 flex-col gap-5 lg:max-xl:col-span-2" ref={agreement}>
             <Panel title="Agreement" aside={`${version.standings.filter(({ state }) => state === 'agreed').length} of ${version.standings.length}`}>
