@@ -136,7 +136,7 @@ function ClutchLine({ row, href }: { row: ClutchRow; href: string }) {
     <li>
       <Link
         href={href}
-        className="grid gap-x-4 gap-y-1 px-4 py-3 hover:bg-paper-2 sm:grid-cols-[7rem_minmax(0,1fr)_minmax(0,14rem)_8rem]"
+        className="grid gap-x-4 gap-y-1 px-4 py-3 hover:bg-hover sm:grid-cols-[7rem_minmax(0,1fr)_minmax(0,14rem)_8rem]"
       >
         <span className="font-mono font-semibold">{row.code}</span>
         <span className="min-w-0">

@@ -62,6 +62,11 @@ export function HatchlingForm({ clutch }: { clutch: ClutchDetail }) {
     setRows((before) => before.map((row, at) => (at === index ? { ...row, ...part } : row)));
   };
   const add = () => setRows((before) => (before.length < most ? [...before, propose(before)] : before));
+  const leaveOut = (index: number) => {
+    // Errors name rows by their place, which changes now.
+    log.reset();
+    setRows((before) => before.filter((_, other) => other !== index));
+  };
   const goDown = (event: KeyboardEvent<HTMLElement>, index: number, column: string) => {
     if (event.key !== 'Enter') return;
     event.preventDefault();
@@ -175,7 +180,7 @@ export function HatchlingForm({ clutch }: { clutch: ClutchDetail }) {
                 tone="link"
                 disabled={rows.length === 1}
                 aria-label={`Leave out young ${index + 1}`}
-                onClick={() => setRows((before) => before.filter((_, other) => other !== index))}
+                onClick={() => leaveOut(index)}
               >
                 Leave out
               </Button>
@@ -183,7 +188,7 @@ export function HatchlingForm({ clutch }: { clutch: ClutchDetail }) {
           );
         })}
       </ol>
-      {wrong('hatchlings') ? <p className="text-sm text-brick">{wrong('hatchlings')}</p> : null}
+      {wrong('hatchlings') ? <p className="text-sm text-alarm">{wrong('hatchlings')}</p> : null}
       <div className="flex flex-wrap gap-2">
         <Button onClick={add} disabled={rows.length >= most}>
           Add another

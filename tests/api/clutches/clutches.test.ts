@@ -47,18 +47,16 @@ describe('clutches', () => {
     await agreeOnTerms(workspace);
     pairing = randomUUID() as PairingId;
     await withScope({ workspaceId }, async (tx) => {
-      await tx
-        .insert(pairings)
-        .values({
-          workspaceId,
-          id: pairing,
-          projectId,
-          season: 2026,
-          sireId,
-          damId,
-          status: 'agreed',
-          createdBy: owner.memberId,
-        });
+      await tx.insert(pairings).values({
+        workspaceId,
+        id: pairing,
+        projectId,
+        season: 2026,
+        sireId,
+        damId,
+        status: 'agreed',
+        createdBy: owner.memberId,
+      });
       const claim = { shows: '', carries: { genotypes: { '+/a': '1' }, basis: 'proven' as const } };
       await tx
         .insert(animalLoci)
