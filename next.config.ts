@@ -5,7 +5,16 @@ const config: NextConfig = {
   reactStrictMode: true,
   typedRoutes: false,
   distDir: process.env.NEXT_DIST_DIR ?? '.next',
-  serverExternalPackages: ['pg-boss', 'pg', 'postgres', 'pino', 'sharp', 'nodemailer', '@react-pdf/renderer', 'highs'],
+  serverExternalPackages: [
+    'pg-boss',
+    'pg',
+    'postgres',
+    'pino',
+    'sharp',
+    'nodemailer',
+    '@react-pdf/renderer',
+    'highs',
+  ],
   experimental: { serverActions: { allowedOrigins: [] } },
   async headers() {
     return [

@@ -10,7 +10,11 @@ export default defineConfig({
     projects: [
       {
         resolve: { alias },
-        test: { name: 'core', include: ['tests/core/**/*.test.ts', 'tests/reference/**/*.test.ts'], environment: 'node' },
+        test: {
+          name: 'core',
+          include: ['tests/core/**/*.test.ts', 'tests/reference/**/*.test.ts'],
+          environment: 'node',
+        },
       },
       {
         resolve: { alias },

@@ -7,7 +7,8 @@ import { ThemeScript } from '@/components/ui/theme-script';
 
 export const metadata: Metadata = {
   title: { default: 'Moiety', template: '%s · Moiety' },
-  description: 'Joint breeding projects: who owns what part, what a pairing can give, and who gets which cent.',
+  description:
+    'Joint breeding projects: who owns what part, what a pairing can give, and who gets which cent.',
   robots: { index: false },
 };
 

@@ -11,12 +11,24 @@ import * as sales from './schema/sales';
 import * as season from './schema/season';
 import * as workspace from './schema/workspace';
 
-export const schema = { ...auth, ...workspace, ...genetics, ...collection, ...projects, ...season, ...sales, ...ledger, ...activity };
+const schema = {
+  ...auth,
+  ...workspace,
+  ...genetics,
+  ...collection,
+  ...projects,
+  ...season,
+  ...sales,
+  ...ledger,
+  ...activity,
+};
 
 export type Database = PostgresJsDatabase<typeof schema>;
 
 // One pool per process, also across the reloads of development.
-const kept = globalThis as { moietyDatabase?: { url: string; database: Database; close: () => Promise<void> } };
+const kept = globalThis as {
+  moietyDatabase?: { url: string; database: Database; close: () => Promise<void> };
+};
 
 /**
  * The app's connection pool, made when first asked for (importing a module must not connect).
@@ -25,10 +37,17 @@ const kept = globalThis as { moietyDatabase?: { url: string; database: Database;
  */
 export function connectDatabase(): Database {
   const url = process.env.DATABASE_URL;
-  if (!url) throw new Error('DATABASE_URL is not set: start the product with "npm start", or point it at a PostgreSQL.');
+  if (!url)
+    throw new Error(
+      'DATABASE_URL is not set: start the product with "npm start", or point it at a PostgreSQL.',
+    );
   if (kept.moietyDatabase?.url !== url) {
     const client = postgres(url, { max: Number(process.env.DATABASE_POOL_SIZE ?? 10), onnotice: () => {} });
-    kept.moietyDatabase = { url, database: drizzle(client, { schema }), close: () => client.end({ timeout: 5 }) };
+    kept.moietyDatabase = {
+      url,
+      database: drizzle(client, { schema }),
+      close: () => client.end({ timeout: 5 }),
+    };
   }
   return kept.moietyDatabase.database;
 }

@@ -34,7 +34,10 @@ export interface Membership {
  * The only way to a transaction: announces the identity for the length of it, so that row-level security filters
  * every statement. A nested announcement goes through `announce`.
  */
-export async function withScope<Result>(identity: Identity, work: (tx: Transaction) => Promise<Result>): Promise<Result> {
+export async function withScope<Result>(
+  identity: Identity,
+  work: (tx: Transaction) => Promise<Result>,
+): Promise<Result> {
   return connectDatabase().transaction(async (tx) => {
     await announce(tx, identity);
     return work(tx);
@@ -42,7 +45,7 @@ export async function withScope<Result>(identity: Identity, work: (tx: Transacti
 }
 
 /** Replaces the identity of a running transaction, for example once a link has told its workspace. */
-export async function announce(tx: Transaction, identity: Identity): Promise<void> {
+async function announce(tx: Transaction, identity: Identity): Promise<void> {
   await tx.execute(sql`select
     set_config('moiety.workspace_id', ${identity.workspaceId ?? ''}, true),
     set_config('moiety.user_id', ${identity.userId ?? ''}, true),
@@ -55,17 +58,30 @@ export async function announce(tx: Transaction, identity: Identity): Promise<voi
  * Proves that a person is a member of a workspace and announces both.
  * @returns null when there is no such workspace or the person is not a member: the two are told apart to nobody
  */
-export async function enterWorkspace(tx: Transaction, slug: string, userId: UserId): Promise<Membership | null> {
+export async function enterWorkspace(
+  tx: Transaction,
+  slug: string,
+  userId: UserId,
+): Promise<Membership | null> {
   await announce(tx, { userId });
   const [found] = await tx
     .select({ workspace: workspaces, member: members })
     .from(workspaces)
-    .innerJoin(members, and(eq(members.workspaceId, workspaces.id), eq(members.userId, userId), isNull(members.endedAt)))
+    .innerJoin(
+      members,
+      and(eq(members.workspaceId, workspaces.id), eq(members.userId, userId), isNull(members.endedAt)),
+    )
     .where(eq(workspaces.slug, slug));
   if (!found) return null;
   await announce(tx, { workspaceId: found.workspace.id, userId });
   const projectIds = found.member.partyId ? await projectsOfParty(tx, found.member.partyId) : [];
-  return { workspace: found.workspace, memberId: found.member.id, role: found.member.role, partyId: found.member.partyId, projectIds };
+  return {
+    workspace: found.workspace,
+    memberId: found.member.id,
+    role: found.member.role,
+    partyId: found.member.partyId,
+    projectIds,
+  };
 }
 
 async function projectsOfParty(tx: Transaction, partyId: PartyId): Promise<ProjectId[]> {

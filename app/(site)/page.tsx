@@ -7,9 +7,18 @@ import { perform } from '@/lib/use-cases/perform';
 import { showMeUseCase } from '@/lib/use-cases/workspace/show-me';
 
 const points = [
-  ['Whose it is', 'Every animal is owned in whole parts with dates. A hatchling’s parts follow from its parents’ and from what the partners agreed.'],
-  ['What can hatch', 'Odds as fractions over any number of loci, with uncertain parents counted as one clutch, not as independent eggs.'],
-  ['What was agreed', 'Terms and pairings are versions that all parties agree to, and that can be shown later exactly as they were.'],
+  [
+    'Whose it is',
+    'Every animal is owned in whole parts with dates. A hatchling’s parts follow from its parents’ and from what the partners agreed.',
+  ],
+  [
+    'What can hatch',
+    'Odds as fractions over any number of loci, with uncertain parents counted as one clutch, not as independent eggs.',
+  ],
+  [
+    'What was agreed',
+    'Terms and pairings are versions that all parties agree to, and that can be shown later exactly as they were.',
+  ],
 ];
 
 /** The public page; a signed-in person goes straight to their workspace. */
@@ -22,8 +31,8 @@ export default async function FrontPage() {
     <div className="mx-auto w-full max-w-3xl pt-8">
       <h1 className="text-3xl">Joint breeding projects, to the last egg and the last cent</h1>
       <p className="mt-4 max-w-2xl text-lg text-ink-2">
-        Moiety is where people who co-own breeding reptiles run their projects: animals and lineage, pairings that all partners
-        agree to, clutches and hatchlings.
+        Moiety is where people who co-own breeding reptiles run their projects: animals and lineage, pairings
+        that all partners agree to, clutches and hatchlings.
       </p>
       {me ? (
         <Notice className="mt-6" title={`You are signed in as ${me.name}`}>

@@ -8,7 +8,7 @@ import { AnimalCode } from './animal-code';
 import { sayDay } from '@/components/drawings/season-days';
 
 /** A relative as a link to its record, or that it is not shown to this person. */
-export function RelativeLink({ relative }: { relative: Relative }) {
+function RelativeLink({ relative }: { relative: Relative }) {
   const { slug } = useWorkspace();
   if (!relative.shown) return <span className="text-ink-3 italic">not shown to you</span>;
   return (

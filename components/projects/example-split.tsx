@@ -14,13 +14,26 @@ export function ExampleSplit({ preview }: { preview: TermsPreview }) {
     amount: step.amount,
     cuts: step.cuts.map(({ label, amount, partyId, note }) => {
       const mark = partyId ? parties.get(partyId)?.mark : undefined;
-      return { label, amount, note, ...(mark === undefined ? { tone: 'slate' as const } : label === 'House share' ? { tone: 'straw' as const } : { partner: mark }) };
+      return {
+        label,
+        amount,
+        note,
+        ...(mark === undefined
+          ? { tone: 'slate' as const }
+          : label === 'House share'
+            ? { tone: 'straw' as const }
+            : { partner: mark }),
+      };
     }),
   }));
   return (
     <div className="flex flex-col gap-2">
       <p className="text-sm text-ink-3">{preview.example}.</p>
-      <MoneySplit steps={steps} format={(amount) => formatMoney(amount, currency)} label="How the example sale would be split" />
+      <MoneySplit
+        steps={steps}
+        format={(amount) => formatMoney(amount, currency)}
+        label="How the example sale would be split"
+      />
     </div>
   );
 }

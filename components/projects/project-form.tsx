@@ -40,17 +40,30 @@ const formSchema = z.object({
 type FormValues = z.infer<typeof formSchema>;
 
 /** The form holds plain text; what is chosen in it comes from lists of real ids. */
-const idsOf = ({ parties, animals }: Pick<FormValues, 'parties' | 'animals'>) => ({ parties: parties as PartyId[], animals: animals as AnimalId[] });
+const idsOf = ({ parties, animals }: Pick<FormValues, 'parties' | 'animals'>) => ({
+  parties: parties as PartyId[],
+  animals: animals as AnimalId[],
+});
 
 /** Starts a joint project. */
 export function NewProjectScreen() {
   const { slug, me } = useWorkspace();
   const router = useRouter();
   const create = useCreateProject();
-  const values: FormValues = { name: '', purpose: '', speciesId: '', parties: me.partyId ? [me.partyId] : [], animals: [], endedOn: '' };
+  const values: FormValues = {
+    name: '',
+    purpose: '',
+    speciesId: '',
+    parties: me.partyId ? [me.partyId] : [],
+    animals: [],
+    endedOn: '',
+  };
   return (
     <>
-      <PageHeader title="Start a joint project" back={{ href: `/${slug}/projects`, label: 'Joint projects' }} />
+      <PageHeader
+        title="Start a joint project"
+        back={{ href: `/${slug}/projects`, label: 'Joint projects' }}
+      />
       <PageBody>
         <ProjectForm
           values={values}
@@ -58,7 +71,13 @@ export function NewProjectScreen() {
           busy={create.isPending}
           error={create.error}
           onSubmit={({ endedOn: _endedOn, ...body }) =>
-            create.mutate({ params: { workspace: slug }, body: { ...body, ...idsOf(body), speciesId: body.speciesId as SpeciesId } }, { onSuccess: ({ id }) => router.push(`/${slug}/projects/${id}`) })
+            create.mutate(
+              {
+                params: { workspace: slug },
+                body: { ...body, ...idsOf(body), speciesId: body.speciesId as SpeciesId },
+              },
+              { onSuccess: ({ id }) => router.push(`/${slug}/projects/${id}`) },
+            )
           }
         />
       </PageBody>
@@ -76,7 +95,9 @@ export function EditProjectScreen({ id }: { id: ProjectId }) {
       <PageHeader title="Edit project" back={back} />
       <PageBody>
         {query.isPending ? <SkeletonText lines={8} /> : null}
-        {query.isError ? <ErrorState onRetry={() => void query.refetch()}>{query.error.problem.detail}</ErrorState> : null}
+        {query.isError ? (
+          <ErrorState onRetry={() => void query.refetch()}>{query.error.problem.detail}</ErrorState>
+        ) : null}
         {query.data ? <EditForm key={query.data.version} project={query.data} /> : null}
       </PageBody>
     </>
@@ -104,7 +125,10 @@ function EditForm({ project }: { project: ProjectDetail }) {
       error={edit.error}
       onSubmit={({ speciesId: _species, endedOn, ...body }) =>
         edit.mutate(
-          { params: { workspace: slug, project: project.id }, body: { ...body, ...idsOf(body), endedOn: endedOn || null, version: project.version } },
+          {
+            params: { workspace: slug, project: project.id },
+            body: { ...body, ...idsOf(body), endedOn: endedOn || null, version: project.version },
+          },
           {
             onSuccess: () => {
               toast.success('Saved');
@@ -117,7 +141,21 @@ function EditForm({ project }: { project: ProjectDetail }) {
   );
 }
 
-function ProjectForm({ values, project, submitLabel, busy, error, onSubmit }: { values: FormValues; project?: ProjectDetail; submitLabel: string; busy: boolean; error: RequestError | null; onSubmit: (values: FormValues) => void }) {
+function ProjectForm({
+  values,
+  project,
+  submitLabel,
+  busy,
+  error,
+  onSubmit,
+}: {
+  values: FormValues;
+  project?: ProjectDetail;
+  submitLabel: string;
+  busy: boolean;
+  error: RequestError | null;
+  onSubmit: (values: FormValues) => void;
+}) {
   const form = useForm<FormValues>({ resolver: zodResolver(formSchema), defaultValues: values });
   const { register, control, handleSubmit, formState } = form;
   const species = useSpeciesList();
@@ -130,27 +168,48 @@ function ProjectForm({ values, project, submitLabel, busy, error, onSubmit }: { 
     return () => window.removeEventListener('beforeunload', warn);
   }, [formState.isDirty, formState.isSubmitSuccessful]);
   return (
-    <form
-      noValidate
-      className="flex max-w-3xl flex-col gap-5"
-      onSubmit={handleSubmit(onSubmit)}
-    >
-      {error ? <FormErrorSummary title={error.problem.status === 409 ? 'Somebody changed this project' : 'This was not saved'} message={error.problem.detail} errors={error.problem.errors.map(({ message }) => ({ message }))} /> : null}
+    <form noValidate className="flex max-w-3xl flex-col gap-5" onSubmit={handleSubmit(onSubmit)}>
+      {error ? (
+        <FormErrorSummary
+          title={error.problem.status === 409 ? 'Somebody changed this project' : 'This was not saved'}
+          message={error.problem.detail}
+          errors={error.problem.errors.map(({ message }) => ({ message }))}
+        />
+      ) : null}
       <Field label="Name" required error={messageOf('name')}>
         <TextInput {...register('name')} />
       </Field>
-      <Field label="What it is for" optional hint="The goal of the project: what should hatch in the end." error={messageOf('purpose')}>
+      <Field
+        label="What it is for"
+        optional
+        hint="The goal of the project: what should hatch in the end."
+        error={messageOf('purpose')}
+      >
         <Textarea rows={3} {...register('purpose')} />
       </Field>
       {project ? null : (
         <Field label="Species" required error={messageOf('speciesId')}>
-          <Select placeholder="Choose …" {...register('speciesId')} options={(species.data?.species ?? []).map(({ id, name }) => ({ value: id, label: name }))} />
+          <Select
+            placeholder="Choose …"
+            {...register('speciesId')}
+            options={(species.data?.species ?? []).map(({ id, name }) => ({ value: id, label: name }))}
+          />
         </Field>
       )}
       <PartiesField control={control} error={messageOf('parties')} />
-      <AnimalsField control={control} species={chosenSpecies} project={project} error={messageOf('animals')} />
+      <AnimalsField
+        control={control}
+        species={chosenSpecies}
+        project={project}
+        error={messageOf('animals')}
+      />
       {project ? (
-        <Field label="Ended on" optional hint="No pairings can be proposed after this day." error={messageOf('endedOn')}>
+        <Field
+          label="Ended on"
+          optional
+          hint="No pairings can be proposed after this day."
+          error={messageOf('endedOn')}
+        >
           <DateInput {...register('endedOn')} />
         </Field>
       ) : null}
@@ -177,7 +236,9 @@ function PartiesField({ control, error }: { control: Control<FormValues>; error?
   return (
     <fieldset className="flex flex-col gap-2">
       <legend className="mb-1 text-sm font-semibold">Partners in order of rank</legend>
-      <p className="text-sm text-ink-3">They are drawn in this order, and of two equal claims the first takes the odd cent.</p>
+      <p className="text-sm text-ink-3">
+        They are drawn in this order, and of two equal claims the first takes the odd cent.
+      </p>
       <ol className="divide-y divide-rule-2 rounded-lg border border-rule bg-card">
         {field.value.map((id, index) => {
           const name = partyOf(id)?.name ?? 'A party';
@@ -188,10 +249,17 @@ function PartiesField({ control, error }: { control: Control<FormValues>; error?
                 <IconButton label={`Move ${name} up`} disabled={index === 0} onClick={() => move(index, -1)}>
                   <ArrowUp aria-hidden />
                 </IconButton>
-                <IconButton label={`Move ${name} down`} disabled={index === field.value.length - 1} onClick={() => move(index, 1)}>
+                <IconButton
+                  label={`Move ${name} down`}
+                  disabled={index === field.value.length - 1}
+                  onClick={() => move(index, 1)}
+                >
                   <ArrowDown aria-hidden />
                 </IconButton>
-                <IconButton label={`Take ${name} out`} onClick={() => field.onChange(field.value.filter((other) => other !== id))}>
+                <IconButton
+                  label={`Take ${name} out`}
+                  onClick={() => field.onChange(field.value.filter((other) => other !== id))}
+                >
                   <X aria-hidden />
                 </IconButton>
               </span>
@@ -213,21 +281,46 @@ function PartiesField({ control, error }: { control: Control<FormValues>; error?
   );
 }
 
-function AnimalsField({ control, species, project, error }: { control: Control<FormValues>; species: string; project?: ProjectDetail; error?: string }) {
+function AnimalsField({
+  control,
+  species,
+  project,
+  error,
+}: {
+  control: Control<FormValues>;
+  species: string;
+  project?: ProjectDetail;
+  error?: string;
+}) {
   const { field } = useController({ control, name: 'animals' });
   const animals = useAnimals({ species: species || undefined, status: 'present', limit: 500 });
   const listed = species ? (animals.data?.rows ?? []) : [];
   // What stands in the project stays in sight, also what is no longer here.
   const kept = (project?.animalRows ?? []).filter(({ id }) => !listed.some((row) => row.id === id));
-  const rows = [...kept, ...listed].map(({ id, code, name, description }) => ({ id, code, name, description }));
-  const toggle = (id: AnimalId) => field.onChange(field.value.includes(id) ? field.value.filter((other) => other !== id) : [...field.value, id]);
+  const rows = [...kept, ...listed].map(({ id, code, name, description }) => ({
+    id,
+    code,
+    name,
+    description,
+  }));
+  const toggle = (id: AnimalId) =>
+    field.onChange(
+      field.value.includes(id) ? field.value.filter((other) => other !== id) : [...field.value, id],
+    );
   return (
     <fieldset className="flex flex-col gap-2">
       <legend className="mb-1 text-sm font-semibold">Animals of the project ({field.value.length})</legend>
       {species === '' ? <p className="text-sm text-ink-3">Choose a species first.</p> : null}
-      {species !== '' && rows.length === 0 && !animals.isPending ? <p className="text-sm text-ink-3">No animal of this species is here.</p> : null}
+      {species !== '' && rows.length === 0 && !animals.isPending ? (
+        <p className="text-sm text-ink-3">No animal of this species is here.</p>
+      ) : null}
       {rows.length > 0 ? (
-        <div className="max-h-80 overflow-y-auto rounded-lg border border-rule bg-card px-3 py-1" tabIndex={0} role="group" aria-label="Animals">
+        <div
+          className="max-h-80 overflow-y-auto rounded-lg border border-rule bg-card px-3 py-1"
+          tabIndex={0}
+          role="group"
+          aria-label="Animals"
+        >
           {rows.map((row) => (
             <Checkbox
               key={row.id}

@@ -69,7 +69,10 @@ function ProjectPage({ project }: { project: ProjectDetail }) {
               </Link>
             ) : null}
             {mayProposePairing && project.termsInForce ? (
-              <Link href={`/${slug}/season/propose?project=${project.id}`} className={buttonClasses({ tone: 'primary' })}>
+              <Link
+                href={`/${slug}/season/propose?project=${project.id}`}
+                className={buttonClasses({ tone: 'primary' })}
+              >
                 Propose pairing
               </Link>
             ) : null}
@@ -77,7 +80,9 @@ function ProjectPage({ project }: { project: ProjectDetail }) {
         }
       />
       <PageBody>
-        {project.purpose ? <p className="max-w-prose text-lg whitespace-pre-line text-ink-2">{project.purpose}</p> : null}
+        {project.purpose ? (
+          <p className="max-w-prose text-lg whitespace-pre-line text-ink-2">{project.purpose}</p>
+        ) : null}
         <div className="grid min-w-0 items-start gap-5 lg:grid-cols-[minmax(0,1fr)_minmax(20rem,26rem)]">
           <div className="flex min-w-0 flex-col gap-5">
             <Panel title="Animals" aside={`${project.animals}`}>
@@ -91,7 +96,10 @@ function ProjectPage({ project }: { project: ProjectDetail }) {
                       id: 'code',
                       header: 'Animal',
                       cell: (row) => (
-                        <Link href={`/${slug}/collection/${row.id}`} className="inline-flex flex-col items-start hover:underline">
+                        <Link
+                          href={`/${slug}/collection/${row.id}`}
+                          className="inline-flex flex-col items-start hover:underline"
+                        >
                           <AnimalCode code={row.code} sex={row.sex} size="sm" />
                           {row.name ? <span className="text-sm text-ink-3">{row.name}</span> : null}
                         </Link>
@@ -101,13 +109,29 @@ function ProjectPage({ project }: { project: ProjectDetail }) {
                     {
                       id: 'status',
                       header: 'Status',
-                      cell: (row) => <span className="whitespace-nowrap">{statusWords[row.status as keyof typeof statusWords] ?? row.status}</span>,
+                      cell: (row) => (
+                        <span className="whitespace-nowrap">
+                          {statusWords[row.status as keyof typeof statusWords] ?? row.status}
+                        </span>
+                      ),
                     },
-                    { id: 'parts', header: 'Owned by', cell: (row) => <ShareStrip shares={shares(row.parts)} label={`${row.code} is owned by`} className="w-28" /> },
+                    {
+                      id: 'parts',
+                      header: 'Owned by',
+                      cell: (row) => (
+                        <ShareStrip
+                          shares={shares(row.parts)}
+                          label={`${row.code} is owned by`}
+                          className="w-28"
+                        />
+                      ),
+                    },
                   ]}
                 />
               ) : (
-                <p className="text-base text-ink-3">No animal stands in this project yet. {mayEdit ? 'Add them under Edit.' : ''}</p>
+                <p className="text-base text-ink-3">
+                  No animal stands in this project yet. {mayEdit ? 'Add them under Edit.' : ''}
+                </p>
               )}
             </Panel>
             <PairingsPanel project={project} mayPropose={mayProposePairing} />
@@ -129,7 +153,12 @@ function ProjectPage({ project }: { project: ProjectDetail }) {
                 ))}
               </ol>
               <h3 className="mt-4 mb-1 text-base font-semibold">Parts in the project’s animals</h3>
-              <ShareStrip shares={shares(project.holdings.parts)} size="lg" labels="percent" label="Parts in the project’s animals" />
+              <ShareStrip
+                shares={shares(project.holdings.parts)}
+                size="lg"
+                labels="percent"
+                label="Parts in the project’s animals"
+              />
             </Panel>
             {project.terms ? <TermsPanel project={project} terms={project.terms} home={home} /> : null}
           </div>
@@ -145,7 +174,9 @@ function PairingsPanel({ project, mayPropose }: { project: ProjectDetail; mayPro
     if (!mayPropose) return null;
     return (
       <Panel title="Pairings">
-        <p className="text-base text-ink-3">{project.termsInForce ? 'None is proposed yet.' : 'Pairings can be proposed once terms are agreed.'}</p>
+        <p className="text-base text-ink-3">
+          {project.termsInForce ? 'None is proposed yet.' : 'Pairings can be proposed once terms are agreed.'}
+        </p>
       </Panel>
     );
   }
@@ -164,8 +195,14 @@ function PairingsPanel({ project, mayPropose }: { project: ProjectDetail; mayPro
               <span className="text-sm text-ink-3">
                 {row.season - 1}–{String(row.season % 100).padStart(2, '0')}
               </span>
-              <Badge tone={row.status === 'agreed' ? 'moss' : row.status === 'proposed' ? 'straw' : 'neutral'}>
-                {row.status === 'proposed' ? `${row.agreed} of ${row.of} agreed` : row.status === 'agreed' ? 'Agreed' : 'Ended'}
+              <Badge
+                tone={row.status === 'agreed' ? 'moss' : row.status === 'proposed' ? 'straw' : 'neutral'}
+              >
+                {row.status === 'proposed'
+                  ? `${row.agreed} of ${row.of} agreed`
+                  : row.status === 'agreed'
+                    ? 'Agreed'
+                    : 'Ended'}
               </Badge>
             </span>
           </li>
@@ -175,7 +212,15 @@ function PairingsPanel({ project, mayPropose }: { project: ProjectDetail; mayPro
   );
 }
 
-function TermsPanel({ project, terms, home }: { project: ProjectDetail; terms: NonNullable<ProjectDetail['terms']>; home: string }) {
+function TermsPanel({
+  project,
+  terms,
+  home,
+}: {
+  project: ProjectDetail;
+  terms: NonNullable<ProjectDetail['terms']>;
+  home: string;
+}) {
   const mayPropose = useMay('terms.propose');
   const open = terms.find(({ status }) => status === 'proposed');
   return (
@@ -189,7 +234,11 @@ function TermsPanel({ project, terms, home }: { project: ProjectDetail; terms: N
         ) : undefined
       }
     >
-      {terms.length === 0 ? <Notice tone="straw">Nothing is agreed yet. Before animals are paired, all parties agree who gives and gets what.</Notice> : null}
+      {terms.length === 0 ? (
+        <Notice tone="straw">
+          Nothing is agreed yet. Before animals are paired, all parties agree who gives and gets what.
+        </Notice>
+      ) : null}
       <ul className="divide-y divide-rule-2">
         {terms.map((version) => {
           const state = termsState(version);
@@ -206,7 +255,11 @@ function TermsPanel({ project, terms, home }: { project: ProjectDetail; terms: N
           );
         })}
       </ul>
-      {terms.some(({ status }) => status === 'agreed') ? <p className="mt-2 text-sm text-ink-3">Agreed versions are locked: they can be shown later exactly as they were agreed.</p> : null}
+      {terms.some(({ status }) => status === 'agreed') ? (
+        <p className="mt-2 text-sm text-ink-3">
+          Agreed versions are locked: they can be shown later exactly as they were agreed.
+        </p>
+      ) : null}
     </Panel>
   );
 }

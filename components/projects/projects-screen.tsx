@@ -19,7 +19,10 @@ import { useMay, useWorkspaceSlug } from '@/lib/client/workspace';
 import type { ProjectRow } from '@/lib/contracts/project';
 
 const which = ['running', 'ended', 'all'] as const;
-const params = { search: parseAsString.withDefault(''), which: parseAsStringLiteral(which).withDefault('running') };
+const params = {
+  search: parseAsString.withDefault(''),
+  which: parseAsStringLiteral(which).withDefault('running'),
+};
 
 /** The joint projects that the caller sees. */
 export function ProjectsScreen() {
@@ -30,13 +33,18 @@ export function ProjectsScreen() {
   const projects = useProjects();
   const rows = projects.data?.rows.filter(
     (row) =>
-      row.name.toLowerCase().includes(state.search.trim().toLowerCase()) && (state.which === 'all' || (state.which === 'ended') === (row.endedOn !== null)),
+      row.name.toLowerCase().includes(state.search.trim().toLowerCase()) &&
+      (state.which === 'all' || (state.which === 'ended') === (row.endedOn !== null)),
   );
   return (
     <>
       <PageHeader
         title="Joint projects"
-        meta={projects.data ? `${projects.data.total} ${projects.data.total === 1 ? 'project' : 'projects'}` : null}
+        meta={
+          projects.data
+            ? `${projects.data.total} ${projects.data.total === 1 ? 'project' : 'projects'}`
+            : null
+        }
         actions={
           mayCreate ? (
             <Link href={`/${slug}/projects/new`} className={buttonClasses({ tone: 'primary' })}>
@@ -46,7 +54,12 @@ export function ProjectsScreen() {
         }
       >
         <div className="flex flex-wrap gap-2">
-          <SearchInput label="Search projects" className="w-64" value={state.search} onChange={(event) => void setState({ search: event.target.value || null })} />
+          <SearchInput
+            label="Search projects"
+            className="w-64"
+            value={state.search}
+            onChange={(event) => void setState({ search: event.target.value || null })}
+          />
           <Segmented
             label="Which projects"
             value={state.which}
@@ -77,7 +90,9 @@ export function ProjectsScreen() {
             ))}
           </ul>
         ) : projects.data && projects.data.total > 0 ? (
-          <EmptyState title="No project matches">Look at all projects, or search for something else.</EmptyState>
+          <EmptyState title="No project matches">
+            Look at all projects, or search for something else.
+          </EmptyState>
         ) : (
           <EmptyState
             title="No joint projects yet"
@@ -89,8 +104,8 @@ export function ProjectsScreen() {
               ) : null
             }
           >
-            A joint project holds partners, animals and the terms that they agree on. Start one, then propose its terms: pairings can be proposed once
-            all parties have agreed.
+            A joint project holds partners, animals and the terms that they agree on. Start one, then propose
+            its terms: pairings can be proposed once all parties have agreed.
           </EmptyState>
         )}
       </PageBody>
@@ -106,13 +121,22 @@ function ProjectLine({ row, href }: { row: ProjectRow; href: string }) {
           {row.name}
         </Link>
         <span className="flex flex-wrap gap-1.5">
-          {row.waitingForMe > 0 ? <Badge tone="ember">{row.waitingForMe === 1 ? 'One proposal waits' : `${row.waitingForMe} proposals wait`} for you</Badge> : null}
+          {row.waitingForMe > 0 ? (
+            <Badge tone="ember">
+              {row.waitingForMe === 1 ? 'One proposal waits' : `${row.waitingForMe} proposals wait`} for you
+            </Badge>
+          ) : null}
           {row.endedOn ? <Badge>Ended {sayDay(row.endedOn)}</Badge> : null}
-          {row.termsInForce === undefined ? null : row.termsInForce === null ? <Badge tone="straw">No terms agreed</Badge> : <Badge tone="moss">Terms v{row.termsInForce}</Badge>}
+          {row.termsInForce === undefined ? null : row.termsInForce === null ? (
+            <Badge tone="straw">No terms agreed</Badge>
+          ) : (
+            <Badge tone="moss">Terms v{row.termsInForce}</Badge>
+          )}
         </span>
       </div>
       <p className="mt-0.5 text-base text-ink-2">
-        {row.species.name} · {row.animals} {row.animals === 1 ? 'animal' : 'animals'} · {row.pairings} {row.pairings === 1 ? 'pairing' : 'pairings'} · since {sayDay(row.startedOn)}
+        {row.species.name} · {row.animals} {row.animals === 1 ? 'animal' : 'animals'} · {row.pairings}{' '}
+        {row.pairings === 1 ? 'pairing' : 'pairings'} · since {sayDay(row.startedOn)}
       </p>
       <p className="mt-1 flex flex-wrap gap-x-4 text-base">
         {row.parties

@@ -4,7 +4,8 @@ import { Notice } from '@/components/ui/notice';
 export function TermsCaution() {
   return (
     <Notice tone="straw">
-      Not legal advice. The product keeps what you agree and splits by it; whether it binds, and how it is taxed, a lawyer and an accountant can tell you.
+      Not legal advice. The product keeps what you agree and splits by it; whether it binds, and how it is
+      taxed, a lawyer and an accountant can tell you.
     </Notice>
   );
 }

@@ -37,7 +37,11 @@ export function TermsEditorScreen({ project }: { project: ProjectId }) {
     <>
       <PageHeader title="Propose terms" back={{ href: `/${slug}/projects/${project}`, label: 'Project' }} />
       <PageBody>
-        {detail.isError || terms.isError ? <ErrorState onRetry={() => void Promise.all([detail.refetch(), terms.refetch()])} /> : <SkeletonText lines={10} />}
+        {detail.isError || terms.isError ? (
+          <ErrorState onRetry={() => void Promise.all([detail.refetch(), terms.refetch()])} />
+        ) : (
+          <SkeletonText lines={10} />
+        )}
       </PageBody>
     </>
   );
@@ -72,7 +76,12 @@ function TermsEditor({ project, versions }: { project: ProjectDetail; versions: 
     setTouched(true);
     setDraft((before) => ({ ...before, ...part }));
   };
-  const preview = useTermsPreview(project.id, { content: draft, price: price !== null && price >= 1 ? price : 100_000, cardFee: 3_200, costs: draft.costsFirst ? 8_000 : 0 });
+  const preview = useTermsPreview(project.id, {
+    content: draft,
+    price: price !== null && price >= 1 ? price : 100_000,
+    cardFee: 3_200,
+    costs: draft.costsFirst ? 8_000 : 0,
+  });
   useEffect(() => {
     if (!touched || propose.isSuccess) return;
     const warn = (event: BeforeUnloadEvent) => event.preventDefault();
@@ -83,7 +92,10 @@ function TermsEditor({ project, versions }: { project: ProjectDetail; versions: 
   const messageFor = (field: string) => propose.error?.messageFor(field) ?? preview.error?.messageFor(field);
   const send = () =>
     propose.mutate(
-      { params: { workspace: slug, project: project.id }, body: { content: draft, inForceFrom, note, replaces: open?.id ?? null } },
+      {
+        params: { workspace: slug, project: project.id },
+        body: { content: draft, inForceFrom, note, replaces: open?.id ?? null },
+      },
       { onSuccess: ({ id }) => router.push(`/${slug}/projects/${project.id}/terms/${id}`) },
     );
   return (
@@ -109,11 +121,24 @@ function TermsEditor({ project, versions }: { project: ProjectDetail; versions: 
         <div className="grid min-w-0 items-start gap-5 lg:grid-cols-2">
           <div className="flex min-w-0 flex-col gap-5">
             <TermsCaution />
-            <TermsFields draft={draft} change={change} parties={project.parties.filter(({ leftOn }) => leftOn === null)} messageFor={messageFor} />
+            <TermsFields
+              draft={draft}
+              change={change}
+              parties={project.parties.filter(({ leftOn }) => leftOn === null)}
+              messageFor={messageFor}
+            />
             <Panel title="From when">
               <div className="flex flex-col gap-4">
-                <Field label="In force from" hint="What was born or sold before keeps the version of its day." error={messageFor('inForceFrom')}>
-                  <DateInput className="max-w-48" value={inForceFrom} onChange={(event) => setInForceFrom(event.target.value)} />
+                <Field
+                  label="In force from"
+                  hint="What was born or sold before keeps the version of its day."
+                  error={messageFor('inForceFrom')}
+                >
+                  <DateInput
+                    className="max-w-48"
+                    value={inForceFrom}
+                    onChange={(event) => setInForceFrom(event.target.value)}
+                  />
                 </Field>
                 <Field label="Note to the others" optional>
                   <Textarea
@@ -132,13 +157,27 @@ function TermsEditor({ project, versions }: { project: ProjectDetail; versions: 
           <div className="flex min-w-0 flex-col gap-5 lg:sticky lg:top-20">
             <Panel title="An example sale">
               <Field label="The buyer pays" className="mb-3 max-w-52">
-                <MoneyInput currency={currency} exponent={exponentOf(currency)} value={price} onChange={setPrice} />
+                <MoneyInput
+                  currency={currency}
+                  exponent={exponentOf(currency)}
+                  value={price}
+                  onChange={setPrice}
+                />
               </Field>
-              {preview.data ? <ExampleSplit preview={preview.data} /> : preview.isError ? <p className="text-base text-alarm">{preview.error.problem.detail}</p> : <SkeletonText lines={6} />}
+              {preview.data ? (
+                <ExampleSplit preview={preview.data} />
+              ) : preview.isError ? (
+                <p className="text-base text-alarm">{preview.error.problem.detail}</p>
+              ) : (
+                <SkeletonText lines={6} />
+              )}
               <p className="mt-2 text-sm text-ink-3">Card fee and costs are made up for the example.</p>
             </Panel>
             {preview.data && preview.data.comparedWith !== null ? (
-              <Panel title={`Beside version ${preview.data.comparedWith}`} aside={`${preview.data.clauses.filter(({ changed }) => changed).length} changed`}>
+              <Panel
+                title={`Beside version ${preview.data.comparedWith}`}
+                aside={`${preview.data.clauses.filter(({ changed }) => changed).length} changed`}
+              >
                 <ClauseList clauses={preview.data.clauses} comparedWith={preview.data.comparedWith} />
               </Panel>
             ) : null}

@@ -42,7 +42,10 @@ export function TermsFields({ draft, change, parties, messageFor }: Props) {
 
 function SidesPanel({ draft, change, parties, messageFor }: Props) {
   const { parties: all } = useWorkspace();
-  const payees = [...parties, ...all.filter(({ id, kind }) => kind === 'house' && !parties.some((party) => party.id === id))];
+  const payees = [
+    ...parties,
+    ...all.filter(({ id, kind }) => kind === 'house' && !parties.some((party) => party.id === id)),
+  ];
   const whole = (value: number | null) => (value === null || Number.isNaN(value) ? 0 : value);
   const { houseShare } = draft;
   return (
@@ -50,17 +53,38 @@ function SidesPanel({ draft, change, parties, messageFor }: Props) {
       <div className="flex flex-col gap-4">
         <div className="grid grid-cols-2 gap-3">
           <Field label="Dam side" hint="parts to her owners" error={messageFor('content.damSide')}>
-            <NumberInput whole value={draft.damSide} onChange={(value) => change({ damSide: whole(value) })} />
+            <NumberInput
+              whole
+              value={draft.damSide}
+              onChange={(value) => change({ damSide: whole(value) })}
+            />
           </Field>
           <Field label="Sire side" hint="parts to his owners" error={messageFor('content.sireSide')}>
-            <NumberInput whole value={draft.sireSide} onChange={(value) => change({ sireSide: whole(value) })} />
+            <NumberInput
+              whole
+              value={draft.sireSide}
+              onChange={(value) => change({ sireSide: whole(value) })}
+            />
           </Field>
         </div>
         <Checkbox
           label="A house share comes off the top"
           hint="For the building, heat and care, before anything is divided."
           checked={houseShare !== null}
-          onChange={() => change(houseShare ? { houseShare: null, cardFees: 'off_the_top' } : { houseShare: { partyId: payees.find(({ id }) => all.find((party) => party.id === id)?.kind === 'house')?.id ?? (payees[0]?.id as PartyId), basisPoints: 800 } })}
+          onChange={() =>
+            change(
+              houseShare
+                ? { houseShare: null, cardFees: 'off_the_top' }
+                : {
+                    houseShare: {
+                      partyId:
+                        payees.find(({ id }) => all.find((party) => party.id === id)?.kind === 'house')?.id ??
+                        (payees[0]?.id as PartyId),
+                      basisPoints: 800,
+                    },
+                  },
+            )
+          }
         />
         {houseShare ? (
           <div className="grid grid-cols-[8rem_minmax(0,1fr)] gap-3">
@@ -68,15 +92,33 @@ function SidesPanel({ draft, change, parties, messageFor }: Props) {
               <NumberInput
                 unit="%"
                 value={houseShare.basisPoints / 100}
-                onChange={(value) => change({ houseShare: { ...houseShare, basisPoints: value === null || Number.isNaN(value) ? 0 : Math.round(value * 100) } })}
+                onChange={(value) =>
+                  change({
+                    houseShare: {
+                      ...houseShare,
+                      basisPoints: value === null || Number.isNaN(value) ? 0 : Math.round(value * 100),
+                    },
+                  })
+                }
               />
             </Field>
             <Field label="goes to" error={messageFor('content.houseShare.partyId')}>
-              <Select value={houseShare.partyId} onChange={(event) => change({ houseShare: { ...houseShare, partyId: event.target.value as PartyId } })} options={payees.map(({ id, name }) => ({ value: id, label: name }))} />
+              <Select
+                value={houseShare.partyId}
+                onChange={(event) =>
+                  change({ houseShare: { ...houseShare, partyId: event.target.value as PartyId } })
+                }
+                options={payees.map(({ id, name }) => ({ value: id, label: name }))}
+              />
             </Field>
           </div>
         ) : null}
-        <Checkbox label="Costs of a clutch are recovered first" hint="Recorded costs go back to who paid them before anything is divided." checked={draft.costsFirst} onChange={() => change({ costsFirst: !draft.costsFirst })} />
+        <Checkbox
+          label="Costs of a clutch are recovered first"
+          hint="Recorded costs go back to who paid them before anything is divided."
+          checked={draft.costsFirst}
+          onChange={() => change({ costsFirst: !draft.costsFirst })}
+        />
         <Field label="Fees of card payments" error={messageFor('content.cardFees')}>
           <Select
             value={draft.cardFees}
@@ -95,7 +137,12 @@ function SidesPanel({ draft, change, parties, messageFor }: Props) {
 function ClausesPanel({ draft, change, messageFor }: Omit<Props, 'parties'>) {
   const clause = (key: keyof TermsDraft['clauses'], label: string, hint: string) => (
     <Field label={label} hint={hint} optional error={messageFor(`content.clauses.${key}`)}>
-      <Textarea rows={2} maxLength={2000} value={draft.clauses[key]} onChange={(event) => change({ clauses: { ...draft.clauses, [key]: event.target.value } })} />
+      <Textarea
+        rows={2}
+        maxLength={2000}
+        value={draft.clauses[key]}
+        onChange={(event) => change({ clauses: { ...draft.clauses, [key]: event.target.value } })}
+      />
     </Field>
   );
   return (

@@ -55,7 +55,12 @@ function TermsPage({ terms }: { terms: TermsDetail }) {
   const [opened] = useQueryState('decide', parseAsString);
   const agreement = useRef<HTMLDivElement>(null);
   const { parties: _parties, ...content } = terms.content;
-  const preview = useTermsPreview(terms.project.id, { content, price: 100_000, cardFee: 3_200, costs: content.costsFirst ? 8_000 : 0 });
+  const preview = useTermsPreview(terms.project.id, {
+    content,
+    price: 100_000,
+    cardFee: 3_200,
+    costs: content.costsFirst ? 8_000 : 0,
+  });
   const opensDecision = opened === '1' && terms.me.mayDecide;
   useEffect(() => {
     // A link from a mail leads straight to the answer.
@@ -67,7 +72,9 @@ function TermsPage({ terms }: { terms: TermsDetail }) {
       {
         onSuccess: ({ status, agreed, of }) => {
           done();
-          toast.success(status === 'agreed' ? 'Agreed by all: these terms are locked.' : `${agreed} of ${of} agreed.`);
+          toast.success(
+            status === 'agreed' ? 'Agreed by all: these terms are locked.' : `${agreed} of ${of} agreed.`,
+          );
         },
       },
     );
@@ -91,7 +98,11 @@ function TermsPage({ terms }: { terms: TermsDetail }) {
               </Link>
             ) : null}
             {terms.me.mayDecide && terms.me.state === 'waiting' ? (
-              <Button tone="primary" busy={decide.isPending} onClick={() => answer({ decision: 'agreed', comment: '' }, () => undefined)}>
+              <Button
+                tone="primary"
+                busy={decide.isPending}
+                onClick={() => answer({ decision: 'agreed', comment: '' }, () => undefined)}
+              >
                 Agree to version {terms.number}
               </Button>
             ) : null}
@@ -99,12 +110,23 @@ function TermsPage({ terms }: { terms: TermsDetail }) {
         }
       />
       <PageBody>
-        {terms.status === 'withdrawn' ? <Notice tone="straw">This version was withdrawn or replaced; it is shown as it was proposed.</Notice> : null}
+        {terms.status === 'withdrawn' ? (
+          <Notice tone="straw">
+            This version was withdrawn or replaced; it is shown as it was proposed.
+          </Notice>
+        ) : null}
         <div className="grid min-w-0 items-start gap-5 lg:grid-cols-[minmax(0,1fr)_minmax(19rem,23rem)]">
           <div className="flex min-w-0 flex-col gap-5">
-            <Panel title="What it says" aside={terms.comparedWith ? `beside version ${terms.comparedWith.number}` : 'the first version'}>
+            <Panel
+              title="What it says"
+              aside={terms.comparedWith ? `beside version ${terms.comparedWith.number}` : 'the first version'}
+            >
               <ClauseList clauses={terms.clauses} comparedWith={terms.comparedWith?.number ?? null} />
-              {terms.note ? <p className="mt-3 border-t border-rule-2 pt-3 text-base whitespace-pre-line text-ink-2">{terms.note}</p> : null}
+              {terms.note ? (
+                <p className="mt-3 border-t border-rule-2 pt-3 text-base whitespace-pre-line text-ink-2">
+                  {terms.note}
+                </p>
+              ) : null}
             </Panel>
             {preview.data ? (
               <Panel title="An example sale" aside="card fee and costs are made up">
@@ -114,8 +136,23 @@ function TermsPage({ terms }: { terms: TermsDetail }) {
           </div>
           <div className="flex min-w-0 flex-col gap-5" ref={agreement}>
             <Panel title="Agreement" aside={`${terms.agreed} of ${terms.of}`}>
-              <AgreementPanel standings={terms.standings} number={terms.number} me={terms.me.partyId} answerBy={null} lockedAt={terms.lockedAt} hash={terms.hash}>
-                {terms.me.mayDecide ? <DecisionButtons number={terms.number} state={terms.me.state} busy={decide.isPending} error={decide.error} onAnswer={answer} /> : null}
+              <AgreementPanel
+                standings={terms.standings}
+                number={terms.number}
+                me={terms.me.partyId}
+                answerBy={null}
+                lockedAt={terms.lockedAt}
+                hash={terms.hash}
+              >
+                {terms.me.mayDecide ? (
+                  <DecisionButtons
+                    number={terms.number}
+                    state={terms.me.state}
+                    busy={decide.isPending}
+                    error={decide.error}
+                    onAnswer={answer}
+                  />
+                ) : null}
               </AgreementPanel>
               <p className="mt-3 text-sm text-ink-3">Proposed by {terms.proposedBy}.</p>
             </Panel>
@@ -149,9 +186,19 @@ function WithdrawTerms({ terms }: { terms: TermsDetail }) {
         description="It can’t be agreed any more. It stays on record, and the next proposal gets a new number."
         confirmLabel="Withdraw"
         busy={withdraw.isPending}
-        onConfirm={() => withdraw.mutate({ params: { workspace: slug, project: terms.project.id, terms: terms.id }, body: { version: terms.version, reason: '' } }, { onSuccess: () => setOpen(false) })}
+        onConfirm={() =>
+          withdraw.mutate(
+            {
+              params: { workspace: slug, project: terms.project.id, terms: terms.id },
+              body: { version: terms.version, reason: '' },
+            },
+            { onSuccess: () => setOpen(false) },
+          )
+        }
       >
-        {withdraw.isError ? <FormErrorSummary title="This was not withdrawn" message={withdraw.error.problem.detail} /> : null}
+        {withdraw.isError ? (
+          <FormErrorSummary title="This was not withdrawn" message={withdraw.error.problem.detail} />
+        ) : null}
       </ConfirmDialog>
     </>
   );

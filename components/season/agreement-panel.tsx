@@ -43,12 +43,19 @@ export function AgreementPanel({
               <div className="min-w-0 text-base">
                 <p>
                   <span className="font-semibold">{name}</span>
-                  {isMe ? <span className="text-ink-3"> (you)</span> : null} {sayStanding(standing.state, number)}
+                  {isMe ? <span className="text-ink-3"> (you)</span> : null}{' '}
+                  {sayStanding(standing.state, number)}
                 </p>
                 <p className="text-sm text-ink-3">
-                  {standing.at ? `${standing.by && standing.by !== name ? `${standing.by}, ` : ''}${sayMoment(standing.at, timeZone)}` : answerBy ? `answer by ${sayDay(answerBy)}` : 'no answer yet'}
+                  {standing.at
+                    ? `${standing.by && standing.by !== name ? `${standing.by}, ` : ''}${sayMoment(standing.at, timeZone)}`
+                    : answerBy
+                      ? `answer by ${sayDay(answerBy)}`
+                      : 'no answer yet'}
                 </p>
-                {standing.comment ? <p className="mt-1 rounded-lg bg-rule-2 px-3 py-1.5 break-words">{standing.comment}</p> : null}
+                {standing.comment ? (
+                  <p className="mt-1 rounded-lg bg-rule-2 px-3 py-1.5 break-words">{standing.comment}</p>
+                ) : null}
               </div>
             </li>
           );
@@ -58,7 +65,10 @@ export function AgreementPanel({
         <p className="text-sm text-ink-3">
           Locked {sayMoment(lockedAt, timeZone)}: this version can’t be changed any more.
           {hash ? (
-            <span className="block font-mono text-tick break-all" title="SHA-256, chained to the agreement before it">
+            <span
+              className="block font-mono text-tick break-all"
+              title="SHA-256, chained to the agreement before it"
+            >
               {hash.slice(0, 16)}…
             </span>
           ) : null}
@@ -79,7 +89,11 @@ function StateSign({ state, mark }: { state: Standing['state']; mark: number }) 
   const { fill, text } = partnerMark(mark);
   if (state === 'agreed') {
     return (
-      <span aria-hidden className="grid size-6 shrink-0 place-items-center rounded-full text-paper" style={{ background: fill }}>
+      <span
+        aria-hidden
+        className="grid size-6 shrink-0 place-items-center rounded-full text-paper"
+        style={{ background: fill }}
+      >
         <Check className="size-3.5" strokeWidth={3} />
       </span>
     );

@@ -9,7 +9,21 @@ import type { BreederChoice } from '@/lib/contracts/season';
 import { sayMonths } from './odds-words';
 
 /** Chooses a sire or a dam among the animals that could be paired, with what stands against it. */
-export function BreederPicker({ label, options, value, onChange, error, loading }: { label: string; options: readonly BreederChoice[]; value: string | null; onChange: (id: string | null) => void; error?: string; loading: boolean }) {
+export function BreederPicker({
+  label,
+  options,
+  value,
+  onChange,
+  error,
+  loading,
+}: {
+  label: string;
+  options: readonly BreederChoice[];
+  value: string | null;
+  onChange: (id: string | null) => void;
+  error?: string;
+  loading: boolean;
+}) {
   const shares = useShares();
   const chosen = options.find(({ id }) => id === value);
   return (
@@ -41,7 +55,12 @@ export function BreederPicker({ label, options, value, onChange, error, loading 
           <p>
             {sayMonths(chosen.ageMonths)} · {chosen.grams === null ? 'not weighed' : sayGrams(chosen.grams)}
           </p>
-          <ShareStrip shares={shares(chosen.parts)} size="xs" label={`${chosen.code} is owned by`} className="mt-1" />
+          <ShareStrip
+            shares={shares(chosen.parts)}
+            size="xs"
+            label={`${chosen.code} is owned by`}
+            className="mt-1"
+          />
         </div>
       ) : null}
     </div>

@@ -3,7 +3,8 @@ import type { VersionChange } from '@/lib/contracts/agreement';
 
 /** What differs from the version before: old struck through, new after the arrow. */
 export function ChangesList({ changes }: { changes: readonly VersionChange[] }) {
-  if (changes.length === 0) return <p className="text-base text-ink-3">Nothing that is shown here differs.</p>;
+  if (changes.length === 0)
+    return <p className="text-base text-ink-3">Nothing that is shown here differs.</p>;
   return (
     <dl className="flex flex-col gap-1.5 text-base">
       {changes.map(({ what, before, after }) => (

@@ -43,10 +43,20 @@ export function DecisionButtons({
   };
   return (
     <div className="flex min-w-0 flex-col gap-2">
-      {error && !asks ? <FormErrorSummary title={isStale ? 'This has changed in the meantime' : 'Your answer was not recorded'} message={error.problem.detail} /> : null}
+      {error && !asks ? (
+        <FormErrorSummary
+          title={isStale ? 'This has changed in the meantime' : 'Your answer was not recorded'}
+          message={error.problem.detail}
+        />
+      ) : null}
       <div className="flex flex-wrap gap-2">
         {state === 'agreed' ? null : (
-          <Button tone="primary" className="flex-1" busy={busy && !asks} onClick={() => onAnswer({ decision: 'agreed', comment: '' }, () => undefined)}>
+          <Button
+            tone="primary"
+            className="flex-1"
+            busy={busy && !asks}
+            onClick={() => onAnswer({ decision: 'agreed', comment: '' }, () => undefined)}
+          >
             {agreeLabel}
           </Button>
         )}
@@ -68,9 +78,20 @@ export function DecisionButtons({
           </>
         }
       >
-        {error ? <FormErrorSummary title="Your answer was not recorded" message={error.problem.detail} /> : null}
-        <Field label="What should change" error={missing && !comment.trim() ? 'Say what should change.' : error?.messageFor('comment')}>
-          <Textarea rows={4} maxLength={2000} value={comment} onChange={(event) => setComment(event.target.value)} autoFocus />
+        {error ? (
+          <FormErrorSummary title="Your answer was not recorded" message={error.problem.detail} />
+        ) : null}
+        <Field
+          label="What should change"
+          error={missing && !comment.trim() ? 'Say what should change.' : error?.messageFor('comment')}
+        >
+          <Textarea
+            rows={4}
+            maxLength={2000}
+            value={comment}
+            onChange={(event) => setComment(event.target.value)}
+            autoFocus
+          />
         </Field>
       </Dialog>
     </div>

@@ -2,7 +2,8 @@
 export const readableOdds = (odds: string): string | undefined => (odds.length <= 7 ? odds : undefined);
 
 /** "41", or "4.9" for few. */
-export const sayCount = (count: number) => (count >= 10 ? String(Math.round(count)) : count.toFixed(1).replace(/\.0$/, ''));
+export const sayCount = (count: number) =>
+  count >= 10 ? String(Math.round(count)) : count.toFixed(1).replace(/\.0$/, '');
 
 /** "Season 2026–27": the year in which the young are expected and the one before. */
 export const saySeason = (season: number) => `Season ${season - 1}–${String(season % 100).padStart(2, '0')}`;
@@ -18,5 +19,11 @@ export function sayMonths(months: number | null): string {
 
 /** "1 Dec, 21:14" in the workspace's time zone. */
 export function sayMoment(instant: string, timeZone: string): string {
-  return new Intl.DateTimeFormat('en-GB', { day: 'numeric', month: 'short', hour: '2-digit', minute: '2-digit', timeZone }).format(new Date(instant));
+  return new Intl.DateTimeFormat('en-GB', {
+    day: 'numeric',
+    month: 'short',
+    hour: '2-digit',
+    minute: '2-digit',
+    timeZone,
+  }).format(new Date(instant));
 }

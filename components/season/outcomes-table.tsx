@@ -10,8 +10,17 @@ type Outcome = SeenFigures['outcomes'][number];
 const sexWord = { male: 'males', female: 'females' } as const;
 
 /** What can hatch: looks, what they carry, the odds of an egg and of at least one in the clutch, and what one is worth. */
-export function OutcomesTable({ figures, currency, price }: { figures: SeenFigures; currency: string; price?: (row: Outcome) => ReactNode }) {
-  const showsWorth = price !== undefined || figures.outcomes.some((row) => row.price !== undefined && row.price !== null);
+export function OutcomesTable({
+  figures,
+  currency,
+  price,
+}: {
+  figures: SeenFigures;
+  currency: string;
+  price?: (row: Outcome) => ReactNode;
+}) {
+  const showsWorth =
+    price !== undefined || figures.outcomes.some((row) => row.price !== undefined && row.price !== null);
   const columns: PlainColumn<Outcome>[] = [
     {
       id: 'looks',
@@ -22,7 +31,10 @@ export function OutcomesTable({ figures, currency, price }: { figures: SeenFigur
           {row.sex ? <span className="text-ink-3"> ({sexWord[row.sex]})</span> : null}
           {row.carries ? <span className="block text-sm text-ink-2">{row.carries}</span> : null}
           <span aria-hidden className="mt-1 block h-2 overflow-hidden rounded-[2px] bg-track">
-            <span className="block h-full rounded-[2px] bg-slate" style={{ width: `${row.probability * 100}%`, minWidth: 2 }} />
+            <span
+              className="block h-full rounded-[2px] bg-slate"
+              style={{ width: `${row.probability * 100}%`, minWidth: 2 }}
+            />
           </span>
         </span>
       ),
@@ -40,21 +52,46 @@ export function OutcomesTable({ figures, currency, price }: { figures: SeenFigur
         </>
       ),
     },
-    { id: 'least', header: `≥ 1 of ${figures.eggsExpected}`, align: 'end', cell: (row) => percentText(row.atLeastOne) },
+    {
+      id: 'least',
+      header: `≥ 1 of ${figures.eggsExpected}`,
+      align: 'end',
+      cell: (row) => percentText(row.atLeastOne),
+    },
   ];
   if (showsWorth) {
     columns.push({
       id: 'worth',
       header: 'worth',
       align: 'end',
-      cell: (row) => (price ? price(row) : row.price === null || row.price === undefined ? <span className="text-ink-3">no price</span> : formatMoney(row.price, currency)),
+      cell: (row) =>
+        price ? (
+          price(row)
+        ) : row.price === null || row.price === undefined ? (
+          <span className="text-ink-3">no price</span>
+        ) : (
+          formatMoney(row.price, currency)
+        ),
     });
   }
   return (
     <>
-      <PlainTable label="What can hatch" columns={columns} rows={figures.outcomes} rowKey={(row) => row.key} />
-      {figures.leftOut > 0 ? <p className="mt-2 text-sm text-ink-3">Rarer looks, {percentText(figures.leftOut)} together, are left out of the table.</p> : null}
-      {figures.lethal !== '0' ? <p className="mt-2 text-sm text-straw">{figures.lethal} of the eggs would not live: a lethal genotype.</p> : null}
+      <PlainTable
+        label="What can hatch"
+        columns={columns}
+        rows={figures.outcomes}
+        rowKey={(row) => row.key}
+      />
+      {figures.leftOut > 0 ? (
+        <p className="mt-2 text-sm text-ink-3">
+          Rarer looks, {percentText(figures.leftOut)} together, are left out of the table.
+        </p>
+      ) : null}
+      {figures.lethal !== '0' ? (
+        <p className="mt-2 text-sm text-straw">
+          {figures.lethal} of the eggs would not live: a lethal genotype.
+        </p>
+      ) : null}
     </>
   );
 }

@@ -31,7 +31,11 @@ export function PairingPanel({ id, onClose }: { id: PairingId; onClose: () => vo
   if (query.isError) {
     const isGone = query.error.problem.status === 404;
     return (
-      <ErrorState title={isGone ? 'No such pairing' : undefined} onRetry={isGone ? onClose : () => void query.refetch()} retrying={query.isFetching}>
+      <ErrorState
+        title={isGone ? 'No such pairing' : undefined}
+        onRetry={isGone ? onClose : () => void query.refetch()}
+        retrying={query.isFetching}
+      >
         {query.error.problem.detail}
       </ErrorState>
     );
@@ -77,7 +81,11 @@ function PairingSummary({ pairing }: { pairing: PairingDetail }) {
             </li>
           ))}
         </ul>
-        {figures.outcomes.length > 8 ? <p className="mt-1 text-sm text-ink-3">{figures.outcomes.length - 8} more on the page of the pairing.</p> : null}
+        {figures.outcomes.length > 8 ? (
+          <p className="mt-1 text-sm text-ink-3">
+            {figures.outcomes.length - 8} more on the page of the pairing.
+          </p>
+        ) : null}
       </section>
       {figures.uncertain ? <Notice>{figures.uncertain}</Notice> : null}
       <WarningsList figures={figures} />
@@ -104,7 +112,14 @@ export function PairingPanelFooter({ id }: { id: PairingId }) {
   return (
     <div className="flex flex-col gap-2">
       {pairing && waits ? (
-        <DecisionButtons number={pairing.number} state={pairing.me.state} busy={busy} error={error} onAnswer={answer} agreeLabel="Agree to this pairing" />
+        <DecisionButtons
+          number={pairing.number}
+          state={pairing.me.state}
+          busy={busy}
+          error={error}
+          onAnswer={answer}
+          agreeLabel="Agree to this pairing"
+        />
       ) : null}
       <Link href={href} className={buttonClasses({ wide: true })}>
         Open the pairing

@@ -17,14 +17,18 @@ const eventWords: Record<PairingDetail['events'][number]['kind'], string> = {
 };
 
 type DayWindow = NonNullable<PairingDetail['laying']>;
-const sayWindow = ({ from, usual, to }: DayWindow) => `about ${sayDay(usual)} (${sayDay(from)} – ${sayDay(to)})`;
+const sayWindow = ({ from, usual, to }: DayWindow) =>
+  `about ${sayDay(usual)} (${sayDay(from)} – ${sayDay(to)})`;
 
 /** What was seen of the pairing, and when what is still to come is expected. */
 export function PairingProgress({ pairing }: { pairing: PairingDetail }) {
   const { slug } = useWorkspace();
   const { laying, hatching, events, clutches } = pairing;
   return (
-    <Panel title="In the room" aside={pairing.status === 'withdrawn' ? undefined : `forecast from: ${pairing.forecastFrom}`}>
+    <Panel
+      title="In the room"
+      aside={pairing.status === 'withdrawn' ? undefined : `forecast from: ${pairing.forecastFrom}`}
+    >
       <dl className="flex flex-col gap-1 text-base">
         {laying ? (
           <div>
@@ -42,7 +46,10 @@ export function PairingProgress({ pairing }: { pairing: PairingDetail }) {
       {events.length > 0 ? (
         <ol className="mt-3 divide-y divide-rule-2 border-t border-rule-2 text-base">
           {events.map((event) => (
-            <li key={event.id} className={`flex justify-between gap-4 py-1.5 ${event.retracted ? 'text-ink-3 line-through' : ''}`}>
+            <li
+              key={event.id}
+              className={`flex justify-between gap-4 py-1.5 ${event.retracted ? 'text-ink-3 line-through' : ''}`}
+            >
               <span>
                 {eventWords[event.kind]}
                 {event.minutes ? `, ${event.minutes} min` : ''}
@@ -60,7 +67,10 @@ export function PairingProgress({ pairing }: { pairing: PairingDetail }) {
       )}
       {clutches.map((clutch) => (
         <p key={clutch.id} className="mt-3 text-base">
-          <Link href={`/${slug}/clutches/${clutch.id}`} className="font-mono font-semibold text-slate underline">
+          <Link
+            href={`/${slug}/clutches/${clutch.id}`}
+            className="font-mono font-semibold text-slate underline"
+          >
             {clutch.code}
           </Link>{' '}
           laid {sayDay(clutch.laidOn)}: {clutch.eggs} eggs{clutch.slugs ? `, ${clutch.slugs} slugs` : ''}

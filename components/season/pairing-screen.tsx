@@ -86,7 +86,10 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
   return (
     <>
       <PageHeader
-        back={{ href: `/${slug}/season?pairing=${pairing.id}&season=${pairing.season}`, label: `Season ${pairing.season - 1}–${String(pairing.season % 100).padStart(2, '0')}` }}
+        back={{
+          href: `/${slug}/season?pairing=${pairing.id}&season=${pairing.season}`,
+          label: `Season ${pairing.season - 1}–${String(pairing.season % 100).padStart(2, '0')}`,
+        }}
         lead={<PairCodes sire={pairing.sire.code} dam={pairing.dam.code} size="md" />}
         title={pairing.title}
         meta={
@@ -105,7 +108,10 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
                 className="w-auto"
                 value={String(pairing.versions.indexOf(version))}
                 onChange={(event) => setShown(Number(event.target.value))}
-                options={pairing.versions.map(({ number, lockedAt }, index) => ({ value: String(index), label: `Version ${number}${lockedAt ? ', agreed' : index === 0 ? '' : ', replaced'}` }))}
+                options={pairing.versions.map(({ number, lockedAt }, index) => ({
+                  value: String(index),
+                  label: `Version ${number}${lockedAt ? ', agreed' : index === 0 ? '' : ', replaced'}`,
+                }))}
               />
             ) : (
               <Badge>Version {version.number}</Badge>
@@ -116,7 +122,11 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
               </Link>
             ) : null}
             {mayAnswer && pairing.me.state === 'waiting' ? (
-              <Button tone="primary" busy={busy} onClick={() => answer({ decision: 'agreed', comment: '' }, () => undefined)}>
+              <Button
+                tone="primary"
+                busy={busy}
+                onClick={() => answer({ decision: 'agreed', comment: '' }, () => undefined)}
+              >
                 Agree to version {version.number}
               </Button>
             ) : null}
@@ -124,10 +134,17 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
         }
       />
       <PageBody>
-        {isCurrent ? null : <Notice tone="straw">This is version {version.number}, which was replaced. It is shown as it was proposed.</Notice>}
+        {isCurrent ? null : (
+          <Notice tone="straw">
+            This is version {version.number}, which was replaced. It is shown as it was proposed.
+          </Notice>
+        )}
         <div className="grid min-w-0 items-start gap-5 lg:grid-cols-2 xl:grid-cols-[minmax(0,1.25fr)_minmax(0,1fr)_minmax(18rem,21rem)]">
           <div className="flex min-w-0 flex-col gap-5">
-            <Panel title="What can hatch" aside={`${sayCount(figures.hatchlingsExpected)} hatchlings expected of ${figures.eggsExpected} eggs`}>
+            <Panel
+              title="What can hatch"
+              aside={`${sayCount(figures.hatchlingsExpected)} hatchlings expected of ${figures.eggsExpected} eggs`}
+            >
               <OutcomesTable figures={figures} currency={currency} />
               {figures.uncertain ? <Notice className="mt-4">{figures.uncertain}</Notice> : null}
             </Panel>
@@ -143,11 +160,17 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
             </Panel>
             <WarningsList figures={figures} />
             {figures.proceeds ? (
-              <Panel title="Whose it would be" aside={`${sayCount(figures.hatchlingsExpected)} hatchlings · terms v${version.termsNumber}`}>
+              <Panel
+                title="Whose it would be"
+                aside={`${sayCount(figures.hatchlingsExpected)} hatchlings · terms v${version.termsNumber}`}
+              >
                 <WorthSplit proceeds={figures.proceeds} termsNumber={version.termsNumber} />
                 <p className="mt-3 text-sm text-ink-3">
                   An expectation over many clutches, not a promise; prices are the proposer’s. By the{' '}
-                  <Link href={`/${slug}/projects/${pairing.project.id}/terms/${version.termsId}`} className="text-slate underline">
+                  <Link
+                    href={`/${slug}/projects/${pairing.project.id}/terms/${version.termsId}`}
+                    className="text-slate underline"
+                  >
                     terms of the project
                   </Link>
                   .
@@ -158,12 +181,33 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
             {pairing.status === 'agreed' ? <PairingLog pairing={pairing.id} /> : null}
           </div>
           <div className="flex min-w-0 flex-col gap-5 lg:max-xl:col-span-2" ref={agreement}>
-            <Panel title="Agreement" aside={`${version.standings.filter(({ state }) => state === 'agreed').length} of ${version.standings.length}`}>
-              <AgreementPanel standings={version.standings} number={version.number} me={pairing.me.partyId} answerBy={version.answerBy} lockedAt={version.lockedAt} hash={version.hash}>
-                {mayAnswer ? <DecisionButtons number={version.number} state={pairing.me.state} busy={busy} error={error} onAnswer={answer} /> : null}
+            <Panel
+              title="Agreement"
+              aside={`${version.standings.filter(({ state }) => state === 'agreed').length} of ${version.standings.length}`}
+            >
+              <AgreementPanel
+                standings={version.standings}
+                number={version.number}
+                me={pairing.me.partyId}
+                answerBy={version.answerBy}
+                lockedAt={version.lockedAt}
+                hash={version.hash}
+              >
+                {mayAnswer ? (
+                  <DecisionButtons
+                    number={version.number}
+                    state={pairing.me.state}
+                    busy={busy}
+                    error={error}
+                    onAnswer={answer}
+                  />
+                ) : null}
               </AgreementPanel>
               {isCurrent && pairing.waitingFor.length > 0 ? (
-                <p className="mt-3 text-sm text-straw">Waiting for {pairing.waitingFor.map((party) => parties.get(party)?.name ?? 'a party').join(', ')}.</p>
+                <p className="mt-3 text-sm text-straw">
+                  Waiting for{' '}
+                  {pairing.waitingFor.map((party) => parties.get(party)?.name ?? 'a party').join(', ')}.
+                </p>
               ) : null}
             </Panel>
             {before ? (
@@ -180,7 +224,9 @@ function PairingPage({ pairing }: { pairing: PairingDetail }) {
                 <dt className="text-ink-2">Proposed by</dt>
                 <dd>{version.proposedBy}</dd>
               </dl>
-              {version.plan.note ? <p className="mt-2 text-base whitespace-pre-line">{version.plan.note}</p> : null}
+              {version.plan.note ? (
+                <p className="mt-2 text-base whitespace-pre-line">{version.plan.note}</p>
+              ) : null}
             </Panel>
             {talks ? (
               <Panel title="Talk">

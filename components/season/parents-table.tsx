@@ -32,7 +32,12 @@ export function ParentsTable({ figures }: { figures: SeenFigures }) {
         <thead>
           <tr className="border-b border-rule text-left text-sm text-ink-3">
             <td />
-            {([['sire', sire, 'male'], ['dam', dam, 'female']] as const).map(([word, parent, sex]) => (
+            {(
+              [
+                ['sire', sire, 'male'],
+                ['dam', dam, 'female'],
+              ] as const
+            ).map(([word, parent, sex]) => (
               <th key={word} scope="col" className="pb-2 font-normal">
                 {word}{' '}
                 <Link href={`/${slug}/collection/${parent.id}`} className="hover:underline">
@@ -50,7 +55,9 @@ export function ParentsTable({ figures }: { figures: SeenFigures }) {
               return (
                 <span className="inline-flex flex-wrap items-center gap-2">
                   <AllelePair locus={own.name} copies={own.copies} note={own.words} />
-                  {own.copies.some(({ probability }) => probability > 0 && probability < 1) ? <span className="text-sm text-ink-2">{own.words}</span> : null}
+                  {own.copies.some(({ probability }) => probability > 0 && probability < 1) ? (
+                    <span className="text-sm text-ink-2">{own.words}</span>
+                  ) : null}
                 </span>
               );
             }),
@@ -59,10 +66,17 @@ export function ParentsTable({ figures }: { figures: SeenFigures }) {
             <span className="font-mono">{sayMonths(parent.ageMonths)}</span>
           ))}
           {line('Weight', (parent) => (
-            <span className="font-mono">{parent.grams === null ? 'not weighed' : sayGrams(parent.grams)}</span>
+            <span className="font-mono">
+              {parent.grams === null ? 'not weighed' : sayGrams(parent.grams)}
+            </span>
           ))}
           {line('Owned by', (parent) => (
-            <ShareStrip shares={shares(parent.parts)} size="sm" label={`${parent.code} is owned by`} className="min-w-24" />
+            <ShareStrip
+              shares={shares(parent.parts)}
+              size="sm"
+              label={`${parent.code} is owned by`}
+              className="min-w-24"
+            />
           ))}
         </tbody>
       </table>

@@ -44,12 +44,28 @@ export function ProposeFields({
               <Select
                 placeholder="Choose …"
                 value={form.projectId ?? ''}
-                onChange={(event) => change({ projectId: event.target.value || null, sireId: null, damId: null, prices: null })}
+                onChange={(event) =>
+                  change({ projectId: event.target.value || null, sireId: null, damId: null, prices: null })
+                }
                 options={projects.map(({ id, name }) => ({ value: id, label: name }))}
               />
             </Field>
-            <BreederPicker label="Sire" options={breeders.data?.sires ?? []} loading={breeders.isFetching} value={form.sireId} onChange={(sireId) => change({ sireId, prices: null })} error={messageFor('sireId')} />
-            <BreederPicker label="Dam" options={breeders.data?.dams ?? []} loading={breeders.isFetching} value={form.damId} onChange={(damId) => change({ damId, prices: null })} error={messageFor('damId')} />
+            <BreederPicker
+              label="Sire"
+              options={breeders.data?.sires ?? []}
+              loading={breeders.isFetching}
+              value={form.sireId}
+              onChange={(sireId) => change({ sireId, prices: null })}
+              error={messageFor('sireId')}
+            />
+            <BreederPicker
+              label="Dam"
+              options={breeders.data?.dams ?? []}
+              loading={breeders.isFetching}
+              value={form.damId}
+              onChange={(damId) => change({ damId, prices: null })}
+              error={messageFor('damId')}
+            />
           </>
         )}
         {projectMessage && form.projectId ? (
@@ -59,17 +75,36 @@ export function ProposeFields({
         ) : null}
         <div className="grid grid-cols-2 gap-3">
           <Field label="Together from" error={messageFor('startsOn')}>
-            <DateInput value={form.startsOn ?? preview?.plan.startsOn ?? ''} onChange={(event) => change({ startsOn: event.target.value || null })} />
+            <DateInput
+              value={form.startsOn ?? preview?.plan.startsOn ?? ''}
+              onChange={(event) => change({ startsOn: event.target.value || null })}
+            />
           </Field>
           <Field label="until" error={messageFor('endsOn')}>
-            <DateInput value={form.endsOn ?? preview?.plan.endsOn ?? ''} onChange={(event) => change({ endsOn: event.target.value || null })} />
+            <DateInput
+              value={form.endsOn ?? preview?.plan.endsOn ?? ''}
+              onChange={(event) => change({ endsOn: event.target.value || null })}
+            />
           </Field>
         </div>
-        <Field label="Eggs expected" hint="The species’ usual clutch unless you know better." error={messageFor('eggsExpected')}>
-          <NumberInput whole value={form.eggsExpected ?? preview?.plan.eggsExpected ?? null} onChange={(eggsExpected) => change({ eggsExpected })} />
+        <Field
+          label="Eggs expected"
+          hint="The species’ usual clutch unless you know better."
+          error={messageFor('eggsExpected')}
+        >
+          <NumberInput
+            whole
+            value={form.eggsExpected ?? preview?.plan.eggsExpected ?? null}
+            onChange={(eggsExpected) => change({ eggsExpected })}
+          />
         </Field>
         <Field label="Note to the others" optional error={messageFor('note')}>
-          <Textarea rows={3} maxLength={2000} value={form.note} onChange={(event) => change({ note: event.target.value })} />
+          <Textarea
+            rows={3}
+            maxLength={2000}
+            value={form.note}
+            onChange={(event) => change({ note: event.target.value })}
+          />
         </Field>
         <Field label="Answer by" optional error={messageFor('answerBy')}>
           <DateInput value={form.answerBy} onChange={(event) => change({ answerBy: event.target.value })} />
@@ -82,13 +117,21 @@ export function ProposeFields({
                   key={text}
                   label={`I have read: ${text}`}
                   checked={form.acknowledged.includes(text)}
-                  onChange={() => change({ acknowledged: form.acknowledged.includes(text) ? form.acknowledged.filter((one) => one !== text) : [...form.acknowledged, text] })}
+                  onChange={() =>
+                    change({
+                      acknowledged: form.acknowledged.includes(text)
+                        ? form.acknowledged.filter((one) => one !== text)
+                        : [...form.acknowledged, text],
+                    })
+                  }
                 />
               ))}
             </div>
           </Notice>
         ) : null}
-        {messageFor('acknowledgedCautions') ? <p className="text-sm font-medium text-alarm">{messageFor('acknowledgedCautions')}</p> : null}
+        {messageFor('acknowledgedCautions') ? (
+          <p className="text-sm font-medium text-alarm">{messageFor('acknowledgedCautions')}</p>
+        ) : null}
       </div>
     </Panel>
   );

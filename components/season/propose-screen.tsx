@@ -56,7 +56,9 @@ function ProposeForm({ again, project }: { again?: PairingDetail; project: strin
   const sending = again ? proposeAgain : propose;
   const refused = sending.error;
   const messageFor = (field: string) =>
-    refused?.messageFor(field) ?? preview.error?.messageFor(field) ?? data?.obstacles.find((one) => one.field === field)?.message;
+    refused?.messageFor(field) ??
+    preview.error?.messageFor(field) ??
+    data?.obstacles.find((one) => one.field === field)?.message;
 
   const send = () => {
     if (!data) return;
@@ -73,10 +75,22 @@ function ProposeForm({ again, project }: { again?: PairingDetail; project: strin
       settle();
       router.push(`/${slug}/season/pairings/${id}`);
     };
-    if (again) proposeAgain.mutate({ params: { workspace: slug, pairing: again.id }, body: { seen: again.number, ...body } }, { onSuccess: () => done(again.id) });
+    if (again)
+      proposeAgain.mutate(
+        { params: { workspace: slug, pairing: again.id }, body: { seen: again.number, ...body } },
+        { onSuccess: () => done(again.id) },
+      );
     else {
       propose.mutate(
-        { params: { workspace: slug }, body: { projectId: form.projectId as ProjectId, sireId: form.sireId as AnimalId, damId: form.damId as AnimalId, ...body } },
+        {
+          params: { workspace: slug },
+          body: {
+            projectId: form.projectId as ProjectId,
+            sireId: form.sireId as AnimalId,
+            damId: form.damId as AnimalId,
+            ...body,
+          },
+        },
         { onSuccess: ({ id }) => done(id) },
       );
     }
@@ -85,11 +99,20 @@ function ProposeForm({ again, project }: { again?: PairingDetail; project: strin
   return (
     <>
       <PageHeader
-        back={again ? { href: `/${slug}/season/pairings/${again.id}`, label: again.title } : { href: `/${slug}/season`, label: 'Season' }}
+        back={
+          again
+            ? { href: `/${slug}/season/pairings/${again.id}`, label: again.title }
+            : { href: `/${slug}/season`, label: 'Season' }
+        }
         title={again ? `Propose version ${again.number + 1}` : 'Propose a pairing'}
         meta={data ? saySeason(data.season) : null}
         actions={
-          <Button tone="primary" busy={sending.isPending} disabled={!data || data.obstacles.length > 0} onClick={send}>
+          <Button
+            tone="primary"
+            busy={sending.isPending}
+            disabled={!data || data.obstacles.length > 0}
+            onClick={send}
+          >
             {again ? `Propose version ${again.number + 1}` : 'Propose'}
           </Button>
         }
@@ -103,8 +126,21 @@ function ProposeForm({ again, project }: { again?: PairingDetail; project: strin
           />
         ) : null}
         <div className="grid min-w-0 items-start gap-5 lg:grid-cols-[minmax(18rem,22rem)_minmax(0,1fr)]">
-          <ProposeFields form={form} change={change} preview={data} isAgain={again !== undefined} messageFor={messageFor} />
-          <Figures preview={data} isChosen={Boolean(form.sireId && form.damId)} error={preview.error?.problem.detail} form={form} change={change} isFetching={preview.isFetching} />
+          <ProposeFields
+            form={form}
+            change={change}
+            preview={data}
+            isAgain={again !== undefined}
+            messageFor={messageFor}
+          />
+          <Figures
+            preview={data}
+            isChosen={Boolean(form.sireId && form.damId)}
+            error={preview.error?.problem.detail}
+            form={form}
+            change={change}
+            isFetching={preview.isFetching}
+          />
         </div>
       </PageBody>
     </>
@@ -132,17 +168,23 @@ function Figures({
     if (isChosen) return <SkeletonText lines={10} />;
     return (
       <EmptyState title="Choose a project, a sire and a dam">
-        What can hatch, at what odds, how related the two are and whose the young would be is worked out while you choose. Nothing is kept before you
-        propose.
+        What can hatch, at what odds, how related the two are and whose the young would be is worked out while
+        you choose. Nothing is kept before you propose.
       </EmptyState>
     );
   }
   const { figures, plan, medians } = preview;
   const prices = form.prices ?? plan.prices;
   return (
-    <div className="grid min-w-0 items-start gap-5 xl:grid-cols-[minmax(0,1.3fr)_minmax(0,1fr)]" aria-busy={isFetching}>
+    <div
+      className="grid min-w-0 items-start gap-5 xl:grid-cols-[minmax(0,1.3fr)_minmax(0,1fr)]"
+      aria-busy={isFetching}
+    >
       <div className="flex min-w-0 flex-col gap-5">
-        <Panel title="What can hatch" aside={`${sayCount(figures.hatchlingsExpected)} hatchlings of ${figures.eggsExpected} eggs`}>
+        <Panel
+          title="What can hatch"
+          aside={`${sayCount(figures.hatchlingsExpected)} hatchlings of ${figures.eggsExpected} eggs`}
+        >
           <OutcomesTable
             figures={figures}
             currency={currency}
@@ -157,7 +199,12 @@ function Figures({
                         value={prices[row.key] ?? null}
                         onChange={(amount) => {
                           const { [row.key]: _before, ...others } = prices;
-                          change({ prices: amount === null || Number.isNaN(amount) ? others : { ...others, [row.key]: amount } });
+                          change({
+                            prices:
+                              amount === null || Number.isNaN(amount)
+                                ? others
+                                : { ...others, [row.key]: amount },
+                          });
                         }}
                       />
                       {medians?.[row.key] ? (

@@ -19,7 +19,18 @@ export interface ProposalForm {
   answerBy: string;
 }
 
-const blank: ProposalForm = { projectId: null, sireId: null, damId: null, startsOn: null, endsOn: null, eggsExpected: null, prices: null, note: '', acknowledged: [], answerBy: '' };
+const blank: ProposalForm = {
+  projectId: null,
+  sireId: null,
+  damId: null,
+  startsOn: null,
+  endsOn: null,
+  eggsExpected: null,
+  prices: null,
+  note: '',
+  acknowledged: [],
+  answerBy: '',
+};
 
 /** The form of a proposal begins empty, or with the version that is to be changed. */
 function startOf(again: PairingDetail | undefined, project: string | null): ProposalForm {

@@ -13,7 +13,12 @@ export function PunnettSquares({ squares }: { squares: readonly PunnettSquare[] 
     <div className="flex flex-col gap-3">
       {squares.length > 1 ? (
         <div className="overflow-x-auto">
-          <Segmented label="Loci of the square" value={chosen} onChange={setChosen} options={squares.map(({ title }, index) => ({ value: String(index), label: title }))} />
+          <Segmented
+            label="Loci of the square"
+            value={chosen}
+            onChange={setChosen}
+            options={squares.map(({ title }, index) => ({ value: String(index), label: title }))}
+          />
         </div>
       ) : null}
       <Square square={square} />
@@ -24,9 +29,16 @@ export function PunnettSquares({ squares }: { squares: readonly PunnettSquare[] 
 
 function Square({ square }: { square: PunnettSquare }) {
   return (
-    <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={`Punnett square: ${square.title}`}>
+    <div
+      className="overflow-x-auto"
+      tabIndex={0}
+      role="region"
+      aria-label={`Punnett square: ${square.title}`}
+    >
       <table className="w-full border-separate border-spacing-1 text-center font-mono text-sm">
-        <caption className="sr-only">{square.title}: gametes of the sire in columns, of the dam in rows</caption>
+        <caption className="sr-only">
+          {square.title}: gametes of the sire in columns, of the dam in rows
+        </caption>
         <thead>
           <tr>
             <th scope="col" className="w-20 text-left font-sans font-normal text-ink-3">

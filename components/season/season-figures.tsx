@@ -15,9 +15,15 @@ export function SeasonFigures({ season }: { season: Season }) {
   const { hatchlings, proceeds, agreed, of } = season;
   return (
     <div className="flex flex-wrap items-start gap-x-10 gap-y-4">
-      <Figure label="Agreed" value={`${agreed} of ${of}`} tone={of > 0 && agreed === of ? 'moss' : undefined} />
       <Figure
-        label={<span title="Eight in ten seasons like this would fall into the range.">Hatchlings expected</span>}
+        label="Agreed"
+        value={`${agreed} of ${of}`}
+        tone={of > 0 && agreed === of ? 'moss' : undefined}
+      />
+      <Figure
+        label={
+          <span title="Eight in ten seasons like this would fall into the range.">Hatchlings expected</span>
+        }
         value={sayCount(hatchlings.expected)}
         aside={hatchlings.from < hatchlings.to ? `${hatchlings.from}–${hatchlings.to}` : undefined}
       />
@@ -27,7 +33,12 @@ export function SeasonFigures({ season }: { season: Season }) {
           {proceeds.expected > 0 ? (
             <div className="min-w-56 flex-1 basis-64">
               <p className="mb-1 text-sm text-ink-3">whose share</p>
-              <ShareStrip shares={shares(proceeds.shares.map(({ partyId, amount }) => ({ partyId, parts: amount })))} size="md" labels="percent" label="Expected proceeds" />
+              <ShareStrip
+                shares={shares(proceeds.shares.map(({ partyId, amount }) => ({ partyId, parts: amount })))}
+                size="md"
+                labels="percent"
+                label="Expected proceeds"
+              />
             </div>
           ) : null}
         </>

@@ -15,7 +15,17 @@ const states = [
 ];
 
 /** Which season, project, partner and state; all of it in the address. */
-export function SeasonFilters({ state, season, seasons, onChange }: { state: SeasonState; season: number; seasons: readonly number[]; onChange: (change: Partial<SeasonState>) => void }) {
+export function SeasonFilters({
+  state,
+  season,
+  seasons,
+  onChange,
+}: {
+  state: SeasonState;
+  season: number;
+  seasons: readonly number[];
+  onChange: (change: Partial<SeasonState>) => void;
+}) {
   const { projects, parties } = useWorkspace();
   return (
     <div className="flex flex-wrap gap-2">
@@ -47,7 +57,13 @@ export function SeasonFilters({ state, season, seasons, onChange }: { state: Sea
         className="w-auto"
         placeholder="Any state"
         value={state.state ?? ''}
-        onChange={(event) => onChange({ state: states.some(({ value }) => value === event.target.value) ? (event.target.value as SeasonState['state']) : null })}
+        onChange={(event) =>
+          onChange({
+            state: states.some(({ value }) => value === event.target.value)
+              ? (event.target.value as SeasonState['state'])
+              : null,
+          })
+        }
         options={states}
       />
       {isFiltered(state) ? (

@@ -9,10 +9,25 @@ import type { Season } from '@/lib/contracts/season';
 import { PairCodes } from './pair-codes';
 import { sayPairingState } from './pairing-state';
 
-const stateTones = { moss: 'text-moss', straw: 'text-straw', alarm: 'text-alarm', neutral: 'text-ink-3', slate: 'text-slate', ember: 'text-ember' };
+const stateTones = {
+  moss: 'text-moss',
+  straw: 'text-straw',
+  alarm: 'text-alarm',
+  neutral: 'text-ink-3',
+  slate: 'text-slate',
+  ember: 'text-ember',
+};
 
 /** Every pairing of the season as a lane of the ribbon. */
-export function SeasonLanes({ season, chosen, onOpen }: { season: Season; chosen: string | null; onOpen: (id: string) => void }) {
+export function SeasonLanes({
+  season,
+  chosen,
+  onOpen,
+}: {
+  season: Season;
+  chosen: string | null;
+  onOpen: (id: string) => void;
+}) {
   const { today } = useWorkspace();
   const lanes: RibbonLane[] = season.rows.map((row) => ({
     id: row.id,
@@ -24,7 +39,15 @@ export function SeasonLanes({ season, chosen, onOpen }: { season: Season; chosen
   }));
   return (
     <div className="flex flex-col gap-3">
-      <SeasonRibbon from={season.span.from} to={season.span.to} today={today} lanes={lanes} label="Pairings of the season" activeId={chosen} onOpen={onOpen} />
+      <SeasonRibbon
+        from={season.span.from}
+        to={season.span.to}
+        today={today}
+        lanes={lanes}
+        label="Pairings of the season"
+        activeId={chosen}
+        onOpen={onOpen}
+      />
       <SeasonKey />
     </div>
   );
@@ -37,7 +60,9 @@ function LaneHead({ row }: { row: PairingRow }) {
     <div className="flex min-w-0 flex-col gap-1">
       <div className="flex items-baseline justify-between gap-2">
         <PairCodes sire={row.sire.code} dam={row.dam.code} />
-        <span className={`text-sm font-semibold whitespace-nowrap ${stateTones[state.tone]}`}>{row.status === 'proposed' ? `${row.agreed} of ${row.of}` : state.text}</span>
+        <span className={`text-sm font-semibold whitespace-nowrap ${stateTones[state.tone]}`}>
+          {row.status === 'proposed' ? `${row.agreed} of ${row.of}` : state.text}
+        </span>
       </div>
       <p className="line-clamp-2 text-sm leading-4.5">{row.title}</p>
       <ShareStrip shares={shares(row.youngParts)} size="xs" label="The young would be owned by" />

@@ -12,11 +12,28 @@ export const seasonParams = {
   pairing: parseAsString,
 };
 
-export type SeasonState = { season: number | null; project: string | null; party: string | null; state: (typeof pairingState.options)[number] | null; pairing: string | null };
+export type SeasonState = {
+  season: number | null;
+  project: string | null;
+  party: string | null;
+  state: (typeof pairingState.options)[number] | null;
+  pairing: string | null;
+};
 
 /** The query of an address; `of` leaves out what is only for the eye. */
-export function seasonQueryOf({ season, project, party, state }: Omit<SeasonState, 'pairing'>): z.input<typeof showSeason.query> {
-  return { season: season ?? undefined, project: project ?? undefined, party: party ?? undefined, state: state ?? undefined };
+export function seasonQueryOf({
+  season,
+  project,
+  party,
+  state,
+}: Omit<SeasonState, 'pairing'>): z.input<typeof showSeason.query> {
+  return {
+    season: season ?? undefined,
+    project: project ?? undefined,
+    party: party ?? undefined,
+    state: state ?? undefined,
+  };
 }
 
-export const isFiltered = ({ project, party, state }: Pick<SeasonState, 'project' | 'party' | 'state'>) => Boolean(project ?? party ?? state);
+export const isFiltered = ({ project, party, state }: Pick<SeasonState, 'project' | 'party' | 'state'>) =>
+  Boolean(project ?? party ?? state);

@@ -41,7 +41,11 @@ export function SeasonScreen() {
     >
       <PageHeader
         title={data ? saySeason(data.season) : 'Season'}
-        meta={data ? `${[...projects].slice(0, 2).join(', ')}${projects.size > 2 ? ` and ${projects.size - 2} more` : ''}${projects.size ? ' · ' : ''}${data.of} ${data.of === 1 ? 'pairing' : 'pairings'}` : null}
+        meta={
+          data
+            ? `${[...projects].slice(0, 2).join(', ')}${projects.size > 2 ? ` and ${projects.size - 2} more` : ''}${projects.size ? ' · ' : ''}${data.of} ${data.of === 1 ? 'pairing' : 'pairings'}`
+            : null
+        }
         actions={
           mayPropose ? (
             <Link href={propose} className={buttonClasses({ tone: 'primary' })}>
@@ -50,7 +54,14 @@ export function SeasonScreen() {
           ) : null
         }
       >
-        {data ? <SeasonFilters state={state} season={data.season} seasons={data.seasons} onChange={(change) => void setState(change)} /> : null}
+        {data ? (
+          <SeasonFilters
+            state={state}
+            season={data.season}
+            seasons={data.seasons}
+            onChange={(change) => void setState(change)}
+          />
+        ) : null}
       </PageHeader>
       <PageBody>
         {season.isPending ? (
@@ -65,7 +76,14 @@ export function SeasonScreen() {
             <SeasonLanes season={data} chosen={chosen} onOpen={(id) => choose(id)} />
           </>
         ) : isFiltered(state) ? (
-          <EmptyState title="No pairing matches" action={<Button onClick={() => void setState({ project: null, party: null, state: null })}>Clear filters</Button>}>
+          <EmptyState
+            title="No pairing matches"
+            action={
+              <Button onClick={() => void setState({ project: null, party: null, state: null })}>
+                Clear filters
+              </Button>
+            }
+          >
             There may be pairings in this season, but none is like this.
           </EmptyState>
         ) : (
@@ -79,8 +97,9 @@ export function SeasonScreen() {
               ) : null
             }
           >
-            A pairing is proposed with what it can give and whose that would be. Once every party of its project has agreed, it stands here as a lane
-            across the year, and what is seen in the room replaces what was expected.
+            A pairing is proposed with what it can give and whose that would be. Once every party of its
+            project has agreed, it stands here as a lane across the year, and what is seen in the room
+            replaces what was expected.
           </EmptyState>
         )}
       </PageBody>

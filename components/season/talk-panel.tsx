@@ -13,7 +13,15 @@ import type { CommentSubject } from '@/lib/contracts/comment';
 import { sayMoment } from './odds-words';
 
 /** What the parties say to each other about a pairing or terms. */
-export function TalkPanel({ kind, subject, parties: count }: { kind: CommentSubject; subject: string; parties: number }) {
+export function TalkPanel({
+  kind,
+  subject,
+  parties: count,
+}: {
+  kind: CommentSubject;
+  subject: string;
+  parties: number;
+}) {
   const { slug: workspace, timeZone } = useWorkspace();
   const comments = useComments(kind, subject);
   const write = useWriteComment();
@@ -22,7 +30,10 @@ export function TalkPanel({ kind, subject, parties: count }: { kind: CommentSubj
   const send = (event: FormEvent) => {
     event.preventDefault();
     if (!text.trim()) return;
-    write.mutate({ params: { workspace, kind, subject }, body: { body: text.trim() } }, { onSuccess: () => setText('') });
+    write.mutate(
+      { params: { workspace, kind, subject }, body: { body: text.trim() } },
+      { onSuccess: () => setText('') },
+    );
   };
   return (
     <div className="flex flex-col gap-3">
@@ -33,7 +44,10 @@ export function TalkPanel({ kind, subject, parties: count }: { kind: CommentSubj
           return (
             <li key={comment.id}>
               <p className="text-sm text-ink-3">
-                <span className="text-base font-semibold" style={party ? { color: partnerMark(party.mark).text } : undefined}>
+                <span
+                  className="text-base font-semibold"
+                  style={party ? { color: partnerMark(party.mark).text } : undefined}
+                >
                   {comment.name}
                 </span>{' '}
                 {sayMoment(comment.createdAt, timeZone)}
@@ -43,11 +57,21 @@ export function TalkPanel({ kind, subject, parties: count }: { kind: CommentSubj
           );
         })}
       </ul>
-      {comments.data?.comments.length === 0 ? <p className="text-base text-ink-3">Nothing was said yet.</p> : null}
+      {comments.data?.comments.length === 0 ? (
+        <p className="text-base text-ink-3">Nothing was said yet.</p>
+      ) : null}
       <form onSubmit={send} className="flex flex-col gap-2">
-        {write.isError ? <FormErrorSummary title="This was not sent" message={write.error.problem.detail} /> : null}
+        {write.isError ? (
+          <FormErrorSummary title="This was not sent" message={write.error.problem.detail} />
+        ) : null}
         <Field label={`Write to the ${count} of you`} hideLabel>
-          <Textarea rows={2} maxLength={2000} placeholder={`Write to the ${count} of you …`} value={text} onChange={(event) => setText(event.target.value)} />
+          <Textarea
+            rows={2}
+            maxLength={2000}
+            placeholder={`Write to the ${count} of you …`}
+            value={text}
+            onChange={(event) => setText(event.target.value)}
+          />
         </Field>
         {text.trim() ? (
           <Button type="submit" size="sm" busy={write.isPending} className="self-end">

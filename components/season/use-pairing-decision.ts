@@ -18,7 +18,13 @@ export function usePairingDecision(pairing: PairingDetail | undefined) {
       {
         onSuccess: ({ status, agreed, of }) => {
           done();
-          toast.success(status === 'agreed' ? 'Agreed by all: the pairing is locked.' : decision === 'agreed' ? `${agreed} of ${of} agreed.` : 'The others are told what you ask for.');
+          toast.success(
+            status === 'agreed'
+              ? 'Agreed by all: the pairing is locked.'
+              : decision === 'agreed'
+                ? `${agreed} of ${of} agreed.`
+                : 'The others are told what you ask for.',
+          );
         },
       },
     );

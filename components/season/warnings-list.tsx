@@ -18,7 +18,9 @@ export function WarningsList({ figures }: { figures: Pick<SeenFigures, 'warnings
       {figures.cautions.map(({ text, source }) => (
         <Notice key={text} tone="alarm" title="Welfare of the young">
           <p>{text}</p>
-          <p className="mt-1 text-sm">Source: {source}. A veterinarian decides what is right for an animal.</p>
+          <p className="mt-1 text-sm">
+            Source: {source}. A veterinarian decides what is right for an animal.
+          </p>
         </Notice>
       ))}
     </div>

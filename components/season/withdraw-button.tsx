@@ -28,9 +28,16 @@ export function WithdrawButton({ pairing }: { pairing: PairingDetail }) {
         description="It can’t be agreed any more. What was proposed and answered stays on record, and the two can be proposed again."
         confirmLabel="Withdraw"
         busy={withdraw.isPending}
-        onConfirm={() => withdraw.mutate({ params: { workspace, pairing: pairing.id }, body: { version: pairing.version, reason } }, { onSuccess: () => setOpen(false) })}
+        onConfirm={() =>
+          withdraw.mutate(
+            { params: { workspace, pairing: pairing.id }, body: { version: pairing.version, reason } },
+            { onSuccess: () => setOpen(false) },
+          )
+        }
       >
-        {withdraw.isError ? <FormErrorSummary title="This was not withdrawn" message={withdraw.error.problem.detail} /> : null}
+        {withdraw.isError ? (
+          <FormErrorSummary title="This was not withdrawn" message={withdraw.error.problem.detail} />
+        ) : null}
         <Field label="Reason" optional>
           <TextInput value={reason} maxLength={500} onChange={(event) => setReason(event.target.value)} />
         </Field>

@@ -16,7 +16,11 @@ export function WorthSplit({ proceeds, termsNumber }: { proceeds: Proceeds; term
   const money = (amount: number) => formatMoney(amount, proceeds.currency);
   const strip = [
     ...shares(proceeds.shares.map(({ partyId, amount }) => ({ partyId, parts: amount }))),
-    ...proceeds.steps.map(({ partyId, amount }) => ({ partner: partyId ? (parties.get(partyId)?.mark ?? 6) : 6, name: 'House share', parts: amount })),
+    ...proceeds.steps.map(({ partyId, amount }) => ({
+      partner: partyId ? (parties.get(partyId)?.mark ?? 6) : 6,
+      name: 'House share',
+      parts: amount,
+    })),
   ];
   return (
     <div className="flex flex-col gap-3">
@@ -24,7 +28,13 @@ export function WorthSplit({ proceeds, termsNumber }: { proceeds: Proceeds; term
         <span>Expected proceeds</span>
         <span className="font-mono">{money(proceeds.expected)}</span>
       </p>
-      {proceeds.expected > 0 ? <ShareStrip shares={strip} size="lg" label={`Shares of the proceeds by terms version ${termsNumber}`} /> : null}
+      {proceeds.expected > 0 ? (
+        <ShareStrip
+          shares={strip}
+          size="lg"
+          label={`Shares of the proceeds by terms version ${termsNumber}`}
+        />
+      ) : null}
       <ul className="divide-y divide-rule-2 text-base">
         {proceeds.steps.map((step) => (
           <li key={step.label} className="flex items-baseline justify-between gap-4 py-1.5">

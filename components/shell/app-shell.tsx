@@ -3,7 +3,7 @@ import { PhoneBar } from './phone-bar';
 import { Rail } from './rail';
 import type { ShellProps } from './shell-types';
 
-export type { ShellItem, ShellProject, ShellProps, ShellUser, ShellWorkspace } from './shell-types';
+export type { ShellProps } from './shell-types';
 
 /**
  * The frame of every page of a workspace: a dark rail at the left, or a bar at the foot of a phone. Takes plain props;

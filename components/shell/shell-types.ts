@@ -12,7 +12,7 @@ export type ShellItem = {
   onPhone?: boolean;
 };
 
-export type ShellProject = { href: string; name: string; shares: readonly Share[]; active?: boolean };
+type ShellProject = { href: string; name: string; shares: readonly Share[]; active?: boolean };
 
 export type ShellWorkspace = { href: string; name: string; role: string; current?: boolean };
 

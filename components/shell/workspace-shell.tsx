@@ -31,14 +31,29 @@ export function WorkspaceShell({ children }: { children: ReactNode }) {
   return (
     <AppShell
       homeHref={base}
-      items={shown.map((place) => ({ href: `${base}/${place.path}`, label: place.label, icon: place.icon, active: place === active, onPhone: place.onPhone }))}
+      items={shown.map((place) => ({
+        href: `${base}/${place.path}`,
+        label: place.label,
+        icon: place.icon,
+        active: place === active,
+        onPhone: place.onPhone,
+      }))}
       projects={workspace.projects.map((project) => ({
         href: `${base}/projects/${project.id}`,
         name: project.name,
         active: path.startsWith(`${base}/projects/${project.id}`),
-        shares: project.parties.map(({ partyId }) => ({ partner: parties.get(partyId)?.mark ?? 0, name: parties.get(partyId)?.name ?? '', parts: 1 })),
+        shares: project.parties.map(({ partyId }) => ({
+          partner: parties.get(partyId)?.mark ?? 0,
+          name: parties.get(partyId)?.name ?? '',
+          parts: 1,
+        })),
       }))}
-      workspaces={workspace.workspaces.map(({ slug, name, role }) => ({ href: `/${slug}`, name, role, current: slug === workspace.slug }))}
+      workspaces={workspace.workspaces.map(({ slug, name, role }) => ({
+        href: `/${slug}`,
+        name,
+        role,
+        current: slug === workspace.slug,
+      }))}
       user={{ name: workspace.me.name, email: workspace.me.email }}
       onSignOut={async () => {
         await auth.signOut();

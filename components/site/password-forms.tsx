@@ -14,13 +14,19 @@ import { auth } from '@/lib/client/auth';
 /** Mails a link to set a new password; says the same whether the address is known or not. */
 export function ForgotPasswordForm() {
   const [isSent, setIsSent] = useState(false);
-  const form = useForm({ resolver: zodResolver(z.object({ email: z.email('Write your mail address.') })), defaultValues: { email: '' } });
+  const form = useForm({
+    resolver: zodResolver(z.object({ email: z.email('Write your mail address.') })),
+    defaultValues: { email: '' },
+  });
   const submit = form.handleSubmit(async ({ email }) => {
     const { error } = await auth.requestPasswordReset({ email, redirectTo: '/reset-password' });
     if (error) form.setError('email', { message: 'The mail could not be asked for. Try again in a minute.' });
     else setIsSent(true);
   });
-  if (isSent) return <Notice tone="moss">If an account has this address, a link to set a new password is on its way.</Notice>;
+  if (isSent)
+    return (
+      <Notice tone="moss">If an account has this address, a link to set a new password is on its way.</Notice>
+    );
   return (
     <form onSubmit={submit} noValidate className="flex flex-col gap-4">
       <Field label="Mail address" error={form.formState.errors.email?.message} required>
@@ -56,7 +62,12 @@ export function ResetPasswordForm({ token }: { token: string }) {
   }
   return (
     <form onSubmit={submit} noValidate className="flex flex-col gap-4">
-      <Field label="New password" hint="At least 10 characters" error={form.formState.errors.newPassword?.message} required>
+      <Field
+        label="New password"
+        hint="At least 10 characters"
+        error={form.formState.errors.newPassword?.message}
+        required
+      >
         <TextInput type="password" autoComplete="new-password" {...form.register('newPassword')} />
       </Field>
       <Button type="submit" tone="primary" size="lg" busy={form.formState.isSubmitting}>

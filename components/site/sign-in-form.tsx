@@ -11,11 +11,20 @@ import { Notice } from '@/components/ui/notice';
 import { TextInput } from '@/components/ui/text-input';
 import { auth, safeNext } from '@/lib/client/auth';
 
-const schema = z.object({ email: z.email('Write your mail address.'), password: z.string().min(1, 'Write your password.') });
+const schema = z.object({
+  email: z.email('Write your mail address.'),
+  password: z.string().min(1, 'Write your password.'),
+});
 const codeSchema = z.object({ code: z.string().regex(/^\d{6}$/, 'Six digits from your authenticator.') });
 
 /** Signs a person in with address and password, and a code if they set one up; or mails a link. */
-export function SignInForm({ next, accounts }: { next?: string; accounts: { email: string; password: string; name: string; role: string; what: string }[] }) {
+export function SignInForm({
+  next,
+  accounts,
+}: {
+  next?: string;
+  accounts: { email: string; password: string; name: string; role: string; what: string }[];
+}) {
   const [message, setMessage] = useState<{ tone: 'alarm' | 'moss'; text: string } | null>(null);
   const [asksForCode, setAsksForCode] = useState(false);
   const form = useForm({ resolver: zodResolver(schema), defaultValues: { email: '', password: '' } });
@@ -46,8 +55,15 @@ export function SignInForm({ next, accounts }: { next?: string; accounts: { emai
   const mailLink = async () => {
     setMessage(null);
     if (!(await form.trigger('email'))) return;
-    const { error } = await auth.signIn.magicLink({ email: form.getValues('email'), callbackURL: safeNext(next) });
-    setMessage(error ? { tone: 'alarm', text: 'The link could not be sent. Try again in a minute.' } : { tone: 'moss', text: 'A link to sign in is on its way. It works for 15 minutes.' });
+    const { error } = await auth.signIn.magicLink({
+      email: form.getValues('email'),
+      callbackURL: safeNext(next),
+    });
+    setMessage(
+      error
+        ? { tone: 'alarm', text: 'The link could not be sent. Try again in a minute.' }
+        : { tone: 'moss', text: 'A link to sign in is on its way. It works for 15 minutes.' },
+    );
   };
 
   const verify = code.handleSubmit(async (values) => {
@@ -110,7 +126,8 @@ export function SignInForm({ next, accounts }: { next?: string; accounts: { emai
                     form.setValue('password', account.password);
                   }}
                 >
-                  <span className="font-semibold">{account.name}</span> <span className="text-ink-2">· {account.role}</span>
+                  <span className="font-semibold">{account.name}</span>{' '}
+                  <span className="text-ink-2">· {account.role}</span>
                   <span className="block text-sm text-ink-2">{account.what}</span>
                 </button>
               </li>

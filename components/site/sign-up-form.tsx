@@ -19,12 +19,18 @@ const schema = z.object({
 /** Makes an account; it can be used once the address is confirmed. */
 export function SignUpForm() {
   const [sentTo, setSentTo] = useState<string | null>(null);
-  const form = useForm({ resolver: zodResolver(schema), defaultValues: { name: '', email: '', password: '' } });
+  const form = useForm({
+    resolver: zodResolver(schema),
+    defaultValues: { name: '', email: '', password: '' },
+  });
   const { errors, isSubmitting } = form.formState;
 
   const submit = form.handleSubmit(async (values) => {
     const { error } = await auth.signUp.email({ ...values, callbackURL: '/' });
-    if (error) form.setError('root', { message: error.message ?? 'The server could not be reached. Nothing was saved.' });
+    if (error)
+      form.setError('root', {
+        message: error.message ?? 'The server could not be reached. Nothing was saved.',
+      });
     else setSentTo(values.email);
   });
 

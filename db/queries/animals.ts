@@ -263,16 +263,14 @@ export async function replacePossibleSires(
 ): Promise<void> {
   await tx.delete(possibleSires).where(eq(possibleSires.animalId, animal.id));
   if (sires.length === 0) return;
-  await tx
-    .insert(possibleSires)
-    .values(
-      sires.map(({ animalId: sireId, weight }) => ({
-        workspaceId: animal.workspaceId,
-        animalId: animal.id,
-        sireId,
-        weight,
-      })),
-    );
+  await tx.insert(possibleSires).values(
+    sires.map(({ animalId: sireId, weight }) => ({
+      workspaceId: animal.workspaceId,
+      animalId: animal.id,
+      sireId,
+      weight,
+    })),
+  );
 }
 
 export async function listPossibleSires(tx: Transaction, animalId: AnimalId) {

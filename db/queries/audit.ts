@@ -11,7 +11,11 @@ export async function lockAudit(tx: Transaction, workspaceId: WorkspaceId): Prom
 
 /** @returns the hash of the newest line; '' for an empty log */
 export async function lastAuditHash(tx: Transaction): Promise<string> {
-  const [row] = await tx.select({ hash: auditLog.hash }).from(auditLog).orderBy(desc(auditLog.sequence)).limit(1);
+  const [row] = await tx
+    .select({ hash: auditLog.hash })
+    .from(auditLog)
+    .orderBy(desc(auditLog.sequence))
+    .limit(1);
   return row?.hash ?? '';
 }
 

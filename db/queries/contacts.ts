@@ -16,10 +16,16 @@ export interface ContactFilter {
 }
 
 /** Contacts that match, those with the soonest follow-up first, then by name. */
-export async function listContactRows(tx: Transaction, filter: ContactFilter, page: { offset: number; limit: number }) {
+export async function listContactRows(
+  tx: Transaction,
+  filter: ContactFilter,
+  page: { offset: number; limit: number },
+) {
   const text = filter.search ? `%${filter.search.replace(/[%_\\]/g, '\\$&')}%` : null;
   const where = and(
-    text ? or(ilike(contacts.name, text), ilike(contacts.email, text), ilike(contacts.note, text)) : undefined,
+    text
+      ? or(ilike(contacts.name, text), ilike(contacts.email, text), ilike(contacts.note, text))
+      : undefined,
     filter.kind ? eq(contacts.kind, filter.kind) : undefined,
     filter.tag ? sql`${filter.tag} = any(${contacts.tags})` : undefined,
     filter.dueBy ? and(isNotNull(contacts.followUpOn), lte(contacts.followUpOn, filter.dueBy)) : undefined,
@@ -35,7 +41,9 @@ export async function listContactRows(tx: Transaction, filter: ContactFilter, pa
       followUpOn: contacts.followUpOn,
       followUpNote: contacts.followUpNote,
       invoices: sql<number>`(select count(*)::int from invoices i where i.workspace_id = ${contacts.workspaceId} and i.contact_id = ${contacts.id})`,
-      lastEventAt: sql<string | null>`(select max(e.happened_at) from contact_events e where e.workspace_id = ${contacts.workspaceId} and e.contact_id = ${contacts.id})`,
+      lastEventAt: sql<
+        string | null
+      >`(select max(e.happened_at) from contact_events e where e.workspace_id = ${contacts.workspaceId} and e.contact_id = ${contacts.id})`,
     })
     .from(contacts)
     .where(where)
@@ -58,7 +66,12 @@ export async function insertContact(tx: Transaction, row: typeof contacts.$infer
 }
 
 /** @returns whether the row still had the version that was seen */
-export async function updateContact(tx: Transaction, id: ContactId, seen: number, change: Partial<typeof contacts.$inferInsert>): Promise<boolean> {
+export async function updateContact(
+  tx: Transaction,
+  id: ContactId,
+  seen: number,
+  change: Partial<typeof contacts.$inferInsert>,
+): Promise<boolean> {
   const rows = await tx
     .update(contacts)
     .set({ ...change, version: seen + 1 })
@@ -67,7 +80,10 @@ export async function updateContact(tx: Transaction, id: ContactId, seen: number
   return rows.length === 1;
 }
 
-export async function insertContactEvent(tx: Transaction, row: typeof contactEvents.$inferInsert): Promise<string> {
+export async function insertContactEvent(
+  tx: Transaction,
+  row: typeof contactEvents.$inferInsert,
+): Promise<string> {
   const id = crypto.randomUUID();
   await tx.insert(contactEvents).values({ ...row, id });
   return id;
@@ -76,9 +92,18 @@ export async function insertContactEvent(tx: Transaction, row: typeof contactEve
 /** The history of a contact, newest first. */
 export async function listContactEvents(tx: Transaction, contactId: ContactId) {
   return tx
-    .select({ id: contactEvents.id, kind: contactEvents.kind, body: contactEvents.body, happenedAt: contactEvents.happenedAt, by: users.name })
+    .select({
+      id: contactEvents.id,
+      kind: contactEvents.kind,
+      body: contactEvents.body,
+      happenedAt: contactEvents.happenedAt,
+      by: users.name,
+    })
     .from(contactEvents)
-    .leftJoin(members, and(eq(members.workspaceId, contactEvents.workspaceId), eq(members.id, contactEvents.recordedBy)))
+    .leftJoin(
+      members,
+      and(eq(members.workspaceId, contactEvents.workspaceId), eq(members.id, contactEvents.recordedBy)),
+    )
     .leftJoin(users, eq(users.id, members.userId))
     .where(eq(contactEvents.contactId, contactId))
     .orderBy(desc(contactEvents.happenedAt));
@@ -86,7 +111,14 @@ export async function listContactEvents(tx: Transaction, contactId: ContactId) {
 
 export async function listInvoicesOfContact(tx: Transaction, contactId: ContactId) {
   return tx
-    .select({ id: invoices.id, number: invoices.number, status: invoices.status, total: invoices.total, paid: invoices.paid, issuedOn: invoices.issuedOn })
+    .select({
+      id: invoices.id,
+      number: invoices.number,
+      status: invoices.status,
+      total: invoices.total,
+      paid: invoices.paid,
+      issuedOn: invoices.issuedOn,
+    })
     .from(invoices)
     .where(eq(invoices.contactId, contactId))
     .orderBy(desc(invoices.createdAt));
@@ -94,17 +126,35 @@ export async function listInvoicesOfContact(tx: Transaction, contactId: ContactI
 
 export async function listAnimalsOfContact(tx: Transaction, contactId: ContactId) {
   return tx
-    .select({ id: animals.id, code: animals.code, speciesId: animals.speciesId, price: invoiceLines.amount, deliveredOn: invoices.deliveredOn, description: invoiceLines.description })
+    .select({
+      id: animals.id,
+      code: animals.code,
+      speciesId: animals.speciesId,
+      price: invoiceLines.amount,
+      deliveredOn: invoices.deliveredOn,
+      description: invoiceLines.description,
+    })
     .from(invoiceLines)
-    .innerJoin(invoices, and(eq(invoices.workspaceId, invoiceLines.workspaceId), eq(invoices.id, invoiceLines.invoiceId)))
-    .innerJoin(animals, and(eq(animals.workspaceId, invoiceLines.workspaceId), eq(animals.id, invoiceLines.animalId)))
+    .innerJoin(
+      invoices,
+      and(eq(invoices.workspaceId, invoiceLines.workspaceId), eq(invoices.id, invoiceLines.invoiceId)),
+    )
+    .innerJoin(
+      animals,
+      and(eq(animals.workspaceId, invoiceLines.workspaceId), eq(animals.id, invoiceLines.animalId)),
+    )
     .where(and(eq(invoices.contactId, contactId), sql`${invoices.status} not in ('draft', 'void')`))
     .orderBy(desc(invoices.createdAt), asc(invoiceLines.position));
 }
 
 export async function listDocumentsOfContact(tx: Transaction, contactId: ContactId) {
   return tx
-    .select({ id: documents.id, name: documents.name, contentType: documents.contentType, bytes: documents.bytes })
+    .select({
+      id: documents.id,
+      name: documents.name,
+      contentType: documents.contentType,
+      bytes: documents.bytes,
+    })
     .from(documents)
     .where(and(eq(documents.subjectKind, 'contact'), eq(documents.subjectId, contactId)))
     .orderBy(desc(documents.createdAt));

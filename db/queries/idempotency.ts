@@ -12,11 +12,18 @@ export async function reserveKey(
   tx: Transaction,
   row: { workspaceId: WorkspaceId; key: string; useCase: string; inputHash: string },
 ): Promise<boolean> {
-  const inserted = await tx.insert(idempotencyKeys).values(row).onConflictDoNothing().returning({ key: idempotencyKeys.key });
+  const inserted = await tx
+    .insert(idempotencyKeys)
+    .values(row)
+    .onConflictDoNothing()
+    .returning({ key: idempotencyKeys.key });
   return inserted.length === 1;
 }
 
-export async function findAnswer(tx: Transaction, key: string): Promise<{ inputHash: string; response: unknown } | null> {
+export async function findAnswer(
+  tx: Transaction,
+  key: string,
+): Promise<{ inputHash: string; response: unknown } | null> {
   const [row] = await tx
     .select({ inputHash: idempotencyKeys.inputHash, response: idempotencyKeys.response })
     .from(idempotencyKeys)

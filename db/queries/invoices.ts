@@ -13,7 +13,10 @@ function visibleInvoice(tx: Transaction, sees: Visibility): SQL | undefined {
   const lines = tx
     .select({ id: invoiceLines.invoiceId })
     .from(invoiceLines)
-    .innerJoin(animals, and(eq(animals.workspaceId, invoiceLines.workspaceId), eq(animals.id, invoiceLines.animalId)))
+    .innerJoin(
+      animals,
+      and(eq(animals.workspaceId, invoiceLines.workspaceId), eq(animals.id, invoiceLines.animalId)),
+    )
     .where(visibleAnimal(tx, sees));
   return inArray(invoices.id, lines);
 }
@@ -28,7 +31,10 @@ function selectInvoices(tx: Transaction) {
   return tx
     .select({ invoice: invoices, contactName: contacts.name, contactEmail: contacts.email, nextDueOn })
     .from(invoices)
-    .innerJoin(contacts, and(eq(contacts.workspaceId, invoices.workspaceId), eq(contacts.id, invoices.contactId)));
+    .innerJoin(
+      contacts,
+      and(eq(contacts.workspaceId, invoices.workspaceId), eq(contacts.id, invoices.contactId)),
+    );
 }
 export type InvoiceRecord = NonNullable<Awaited<ReturnType<typeof findInvoice>>>;
 
@@ -40,7 +46,12 @@ export interface InvoiceFilter {
 }
 
 /** Invoices that are seen and match, newest first. */
-export async function listInvoiceRecords(tx: Transaction, sees: Visibility, filter: InvoiceFilter, page: { offset: number; limit: number }) {
+export async function listInvoiceRecords(
+  tx: Transaction,
+  sees: Visibility,
+  filter: InvoiceFilter,
+  page: { offset: number; limit: number },
+) {
   const text = filter.search ? `%${filter.search.replace(/[%_\\]/g, '\\$&')}%` : null;
   const where = and(
     visibleInvoice(tx, sees),
@@ -52,7 +63,9 @@ export async function listInvoiceRecords(tx: Transaction, sees: Visibility, filt
         )
       : undefined,
     filter.status ? eq(invoices.status, filter.status) : undefined,
-    filter.overdueOn ? and(inArray(invoices.status, ['sent', 'part_paid']), sql`${nextDueOn} < ${filter.overdueOn}`) : undefined,
+    filter.overdueOn
+      ? and(inArray(invoices.status, ['sent', 'part_paid']), sql`${nextDueOn} < ${filter.overdueOn}`)
+      : undefined,
   );
   const rows = await selectInvoices(tx)
     .where(where)
@@ -62,7 +75,10 @@ export async function listInvoiceRecords(tx: Transaction, sees: Visibility, filt
   const [total] = await tx
     .select({ total: count() })
     .from(invoices)
-    .innerJoin(contacts, and(eq(contacts.workspaceId, invoices.workspaceId), eq(contacts.id, invoices.contactId)))
+    .innerJoin(
+      contacts,
+      and(eq(contacts.workspaceId, invoices.workspaceId), eq(contacts.id, invoices.contactId)),
+    )
     .where(where);
   return { rows, total: total?.total ?? 0 };
 }
@@ -86,21 +102,36 @@ export async function listLines(tx: Transaction, invoiceIds: InvoiceId[]) {
       position: invoiceLines.position,
     })
     .from(invoiceLines)
-    .leftJoin(animals, and(eq(animals.workspaceId, invoiceLines.workspaceId), eq(animals.id, invoiceLines.animalId)))
+    .leftJoin(
+      animals,
+      and(eq(animals.workspaceId, invoiceLines.workspaceId), eq(animals.id, invoiceLines.animalId)),
+    )
     .where(inArray(invoiceLines.invoiceId, invoiceIds))
     .orderBy(asc(invoiceLines.position));
 }
 
 export async function listInstalments(tx: Transaction, invoiceId: InvoiceId) {
-  return tx.select().from(instalments).where(eq(instalments.invoiceId, invoiceId)).orderBy(asc(instalments.position));
+  return tx
+    .select()
+    .from(instalments)
+    .where(eq(instalments.invoiceId, invoiceId))
+    .orderBy(asc(instalments.position));
 }
 
 export async function listPayments(tx: Transaction, invoiceId: InvoiceId) {
-  return tx.select().from(payments).where(eq(payments.invoiceId, invoiceId)).orderBy(asc(payments.recordedAt), asc(payments.id));
+  return tx
+    .select()
+    .from(payments)
+    .where(eq(payments.invoiceId, invoiceId))
+    .orderBy(asc(payments.recordedAt), asc(payments.id));
 }
 
 export async function listRefunds(tx: Transaction, invoiceId: InvoiceId) {
-  return tx.select().from(refunds).where(eq(refunds.invoiceId, invoiceId)).orderBy(asc(refunds.recordedAt), asc(refunds.id));
+  return tx
+    .select()
+    .from(refunds)
+    .where(eq(refunds.invoiceId, invoiceId))
+    .orderBy(asc(refunds.recordedAt), asc(refunds.id));
 }
 
 export async function insertInvoice(
@@ -118,7 +149,12 @@ export async function insertInvoice(
 }
 
 /** @returns whether the row still had the version that was seen */
-export async function updateInvoice(tx: Transaction, id: InvoiceId, seen: number, change: Partial<typeof invoices.$inferInsert>): Promise<boolean> {
+export async function updateInvoice(
+  tx: Transaction,
+  id: InvoiceId,
+  seen: number,
+  change: Partial<typeof invoices.$inferInsert>,
+): Promise<boolean> {
   const rows = await tx
     .update(invoices)
     .set({ ...change, version: seen + 1 })
@@ -132,7 +168,12 @@ export async function animalsOnOpenInvoices(tx: Transaction, animalIds: AnimalId
   const rows = await tx
     .select({ animalId: invoiceLines.animalId })
     .from(invoiceLines)
-    .innerJoin(invoices, and(eq(invoices.workspaceId, invoiceLines.workspaceId), eq(invoices.id, invoiceLines.invoiceId)))
-    .where(and(inArray(invoiceLines.animalId, animalIds), sql`${invoices.status} not in ('void', 'refunded')`));
+    .innerJoin(
+      invoices,
+      and(eq(invoices.workspaceId, invoiceLines.workspaceId), eq(invoices.id, invoiceLines.invoiceId)),
+    )
+    .where(
+      and(inArray(invoiceLines.animalId, animalIds), sql`${invoices.status} not in ('void', 'refunded')`),
+    );
   return rows.flatMap(({ animalId }) => (animalId ? [animalId] : []));
 }

@@ -22,19 +22,26 @@ function selectListings(tx: Transaction) {
       hatchedOn: animals.hatchedOn,
       clutchId: animals.clutchId,
       projectId: projectOf,
-      projectName: sql<string | null>`(select name from projects p where p.workspace_id = ${animals.workspaceId} and p.id = ${projectOf})`,
+      projectName: sql<
+        string | null
+      >`(select name from projects p where p.workspace_id = ${animals.workspaceId} and p.id = ${projectOf})`,
       state: sql<ListingState>`coalesce(${listings.state}, 'not_listed')`,
       price: listings.price,
       headline: sql<string>`coalesce(${listings.headline}, '')`,
       heldForId: listings.heldFor,
       heldForName: contacts.name,
       heldUntil: listings.heldUntil,
-      photoId: sql<string | null>`(select p.id from photos p where p.workspace_id = ${animals.workspaceId} and p.animal_id = ${animals.id} order by p.position, p.created_at limit 1)`,
+      photoId: sql<
+        string | null
+      >`(select p.id from photos p where p.workspace_id = ${animals.workspaceId} and p.animal_id = ${animals.id} order by p.position, p.created_at limit 1)`,
       version: sql<number>`coalesce(${listings.version}, 0)`,
     })
     .from(animals)
     .leftJoin(listings, and(eq(listings.workspaceId, animals.workspaceId), eq(listings.animalId, animals.id)))
-    .leftJoin(contacts, and(eq(contacts.workspaceId, listings.workspaceId), eq(contacts.id, listings.heldFor)));
+    .leftJoin(
+      contacts,
+      and(eq(contacts.workspaceId, listings.workspaceId), eq(contacts.id, listings.heldFor)),
+    );
 }
 export type ListingRecord = Awaited<ReturnType<typeof selectListings>>[number];
 
@@ -45,13 +52,20 @@ export interface ListingFilter {
 }
 
 /** Animals that are or could be for sale: those that hatched here and those that were ever priced, youngest first. */
-export async function listListingRecords(tx: Transaction, sees: Visibility, filter: ListingFilter, page: { offset: number; limit: number }) {
+export async function listListingRecords(
+  tx: Transaction,
+  sees: Visibility,
+  filter: ListingFilter,
+  page: { offset: number; limit: number },
+) {
   const text = filter.search ? `%${filter.search.replace(/[%_\\]/g, '\\$&')}%` : null;
   const where = and(
     visibleAnimal(tx, sees),
     or(isNotNull(animals.clutchId), isNotNull(listings.id)),
     or(sql`${animals.status} not in ('died', 'missing', 'given_away')`, eq(listings.state, 'sold')),
-    text ? or(ilike(animals.code, text), ilike(animals.name, text), ilike(listings.headline, text)) : undefined,
+    text
+      ? or(ilike(animals.code, text), ilike(animals.name, text), ilike(listings.headline, text))
+      : undefined,
     filter.state ? sql`coalesce(${listings.state}, 'not_listed') = ${filter.state}` : undefined,
     filter.project ? sql`${projectOf} = ${filter.project}` : undefined,
   );
@@ -68,12 +82,22 @@ export async function listListingRecords(tx: Transaction, sees: Visibility, filt
   return { rows, total: total?.total ?? 0 };
 }
 
-export async function findListings(tx: Transaction, sees: Visibility, animalIds: AnimalId[]): Promise<ListingRecord[]> {
+export async function findListings(
+  tx: Transaction,
+  sees: Visibility,
+  animalIds: AnimalId[],
+): Promise<ListingRecord[]> {
   if (animalIds.length === 0) return [];
   return selectListings(tx).where(and(inArray(animals.id, animalIds), visibleAnimal(tx, sees)));
 }
 
-type Change = { state: ListingState; price?: number | null; headline?: string; heldFor?: ContactId | null; heldUntil?: Date | null };
+type Change = {
+  state: ListingState;
+  price?: number | null;
+  headline?: string;
+  heldFor?: ContactId | null;
+  heldUntil?: Date | null;
+};
 
 /**
  * Saves a listing if it still has the version that was seen (0 = none yet).

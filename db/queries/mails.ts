@@ -17,12 +17,19 @@ export async function lockMail(tx: Transaction, id: MailId) {
   return row ?? null;
 }
 
-export async function updateMail(tx: Transaction, id: MailId, change: Partial<typeof mails.$inferInsert>): Promise<void> {
+export async function updateMail(
+  tx: Transaction,
+  id: MailId,
+  change: Partial<typeof mails.$inferInsert>,
+): Promise<void> {
   await tx.update(mails).set(change).where(eq(mails.id, id));
 }
 
 /** Mail that still waits although it was asked for before this moment. */
-export async function waitingMails(tx: Transaction, before: Date): Promise<{ id: MailId; workspaceId: WorkspaceId | null }[]> {
+export async function waitingMails(
+  tx: Transaction,
+  before: Date,
+): Promise<{ id: MailId; workspaceId: WorkspaceId | null }[]> {
   return tx
     .select({ id: mails.id, workspaceId: mails.workspaceId })
     .from(mails)

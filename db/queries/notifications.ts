@@ -19,6 +19,9 @@ export async function membersOfParties(
     .where(and(inArray(members.partyId, [...partyIds]), isNull(members.endedAt)));
 }
 
-export async function insertNotifications(tx: Transaction, rows: (typeof notifications.$inferInsert)[]): Promise<void> {
+export async function insertNotifications(
+  tx: Transaction,
+  rows: (typeof notifications.$inferInsert)[],
+): Promise<void> {
   if (rows.length > 0) await tx.insert(notifications).values(rows);
 }

@@ -74,16 +74,14 @@ export async function insertOwnership(
 ): Promise<string> {
   const id = crypto.randomUUID();
   await tx.insert(ownerships).values({ ...set, workspaceId: workspace.id, id });
-  await tx
-    .insert(ownershipParts)
-    .values(
-      parts.map((part) => ({
-        workspaceId: workspace.id,
-        ownershipId: id,
-        partyId: part.partyId,
-        parts: part.parts,
-      })),
-    );
+  await tx.insert(ownershipParts).values(
+    parts.map((part) => ({
+      workspaceId: workspace.id,
+      ownershipId: id,
+      partyId: part.partyId,
+      parts: part.parts,
+    })),
+  );
   return id;
 }
 

@@ -10,7 +10,11 @@ import { visibleAnimal, type Visibility } from './visibility';
 export async function listLatestWeights(tx: Transaction, ids: readonly AnimalId[]) {
   if (ids.length === 0) return [];
   return tx
-    .selectDistinctOn([weights.animalId], { animalId: weights.animalId, grams: weights.grams, weighedOn: weights.weighedOn })
+    .selectDistinctOn([weights.animalId], {
+      animalId: weights.animalId,
+      grams: weights.grams,
+      weighedOn: weights.weighedOn,
+    })
     .from(weights)
     .where(inArray(weights.animalId, [...ids]))
     .orderBy(weights.animalId, desc(weights.weighedOn), desc(weights.id));
@@ -19,7 +23,14 @@ export async function listLatestWeights(tx: Transaction, ids: readonly AnimalId[
 /** Animals of a species that are seen, are here and have a known sex, by code. */
 export async function listBreedersOf(tx: Transaction, sees: Visibility, speciesId: SpeciesId) {
   return tx
-    .select({ id: animals.id, code: animals.code, name: animals.name, sex: animals.sex, status: animals.status, hatchedOn: animals.hatchedOn })
+    .select({
+      id: animals.id,
+      code: animals.code,
+      name: animals.name,
+      sex: animals.sex,
+      status: animals.status,
+      hatchedOn: animals.hatchedOn,
+    })
     .from(animals)
     .where(
       and(
@@ -33,6 +44,9 @@ export async function listBreedersOf(tx: Transaction, sees: Visibility, speciesI
 }
 
 export async function idsInProject(tx: Transaction, projectId: ProjectId): Promise<Set<AnimalId>> {
-  const rows = await tx.select({ id: projectAnimals.animalId }).from(projectAnimals).where(eq(projectAnimals.projectId, projectId));
+  const rows = await tx
+    .select({ id: projectAnimals.animalId })
+    .from(projectAnimals)
+    .where(eq(projectAnimals.projectId, projectId));
   return new Set(rows.map(({ id }) => id));
 }

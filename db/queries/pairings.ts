@@ -34,8 +34,14 @@ function selectPairings(tx: Transaction) {
       profile: species.profile,
     })
     .from(pairings)
-    .innerJoin(projects, and(eq(projects.workspaceId, pairings.workspaceId), eq(projects.id, pairings.projectId)))
-    .innerJoin(species, and(eq(species.workspaceId, projects.workspaceId), eq(species.id, projects.speciesId)))
+    .innerJoin(
+      projects,
+      and(eq(projects.workspaceId, pairings.workspaceId), eq(projects.id, pairings.projectId)),
+    )
+    .innerJoin(
+      species,
+      and(eq(species.workspaceId, projects.workspaceId), eq(species.id, projects.speciesId)),
+    )
     .innerJoin(sires, and(eq(sires.workspaceId, pairings.workspaceId), eq(sires.id, pairings.sireId)))
     .innerJoin(dams, and(eq(dams.workspaceId, pairings.workspaceId), eq(dams.id, pairings.damId)));
 }
@@ -60,7 +66,9 @@ export async function listPairingRecords(tx: Transaction, sees: Visibility, filt
 }
 
 export async function findPairing(tx: Transaction, sees: Visibility, id: PairingId) {
-  const [row] = await selectPairings(tx).where(and(eq(pairings.id, id), inVisibleProject(sees, pairings.projectId)));
+  const [row] = await selectPairings(tx).where(
+    and(eq(pairings.id, id), inVisibleProject(sees, pairings.projectId)),
+  );
   return row ?? null;
 }
 
@@ -85,7 +93,10 @@ export async function listPairingVersions(tx: Transaction, ids: readonly Pairing
   return tx
     .select({ row: pairingVersions, proposedBy: users.name, proposedByParty: members.partyId })
     .from(pairingVersions)
-    .innerJoin(members, and(eq(members.workspaceId, pairingVersions.workspaceId), eq(members.id, pairingVersions.proposedBy)))
+    .innerJoin(
+      members,
+      and(eq(members.workspaceId, pairingVersions.workspaceId), eq(members.id, pairingVersions.proposedBy)),
+    )
     .innerJoin(users, eq(users.id, members.userId))
     .where(inArray(pairingVersions.pairingId, [...ids]))
     .orderBy(asc(pairingVersions.pairingId), desc(pairingVersions.number));
@@ -105,7 +116,10 @@ export async function listPairingDecisions(tx: Transaction, ids: readonly Pairin
       decidedAt: pairingDecisions.decidedAt,
     })
     .from(pairingDecisions)
-    .innerJoin(members, and(eq(members.workspaceId, pairingDecisions.workspaceId), eq(members.id, pairingDecisions.decidedBy)))
+    .innerJoin(
+      members,
+      and(eq(members.workspaceId, pairingDecisions.workspaceId), eq(members.id, pairingDecisions.decidedBy)),
+    )
     .innerJoin(users, eq(users.id, members.userId))
     .where(inArray(pairingDecisions.pairingVersionId, [...ids]))
     .orderBy(asc(pairingDecisions.decidedAt));
@@ -125,7 +139,16 @@ export async function listEventsOfPairings(tx: Transaction, ids: readonly Pairin
 export async function listClutchesOfPairings(tx: Transaction, ids: readonly PairingId[]) {
   if (ids.length === 0) return [];
   return tx
-    .select({ pairingId: clutches.pairingId, id: clutches.id, code: clutches.code, laidOn: clutches.laidOn, hatchedOn: clutches.hatchedOn, eggs: clutches.eggs, slugs: clutches.slugs, young: sql<number>`(select count(*)::int from ${animals} y where y.workspace_id = ${clutches.workspaceId} and y.clutch_id = ${clutches.id})` })
+    .select({
+      pairingId: clutches.pairingId,
+      id: clutches.id,
+      code: clutches.code,
+      laidOn: clutches.laidOn,
+      hatchedOn: clutches.hatchedOn,
+      eggs: clutches.eggs,
+      slugs: clutches.slugs,
+      young: sql<number>`(select count(*)::int from ${animals} y where y.workspace_id = ${clutches.workspaceId} and y.clutch_id = ${clutches.id})`,
+    })
     .from(clutches)
     .where(inArray(clutches.pairingId, [...ids]))
     .orderBy(asc(clutches.laidOn));
@@ -135,9 +158,19 @@ export async function listClutchesOfPairings(tx: Transaction, ids: readonly Pair
 export async function listRefusals(tx: Transaction, ids: readonly AnimalId[]) {
   if (ids.length === 0) return [];
   return tx
-    .select({ sireId: pairings.sireId, damId: pairings.damId, season: pairings.season, seenOn: pairingEvents.seenOn, sireCode: sires.code, damCode: dams.code })
+    .select({
+      sireId: pairings.sireId,
+      damId: pairings.damId,
+      season: pairings.season,
+      seenOn: pairingEvents.seenOn,
+      sireCode: sires.code,
+      damCode: dams.code,
+    })
     .from(pairingEvents)
-    .innerJoin(pairings, and(eq(pairings.workspaceId, pairingEvents.workspaceId), eq(pairings.id, pairingEvents.pairingId)))
+    .innerJoin(
+      pairings,
+      and(eq(pairings.workspaceId, pairingEvents.workspaceId), eq(pairings.id, pairingEvents.pairingId)),
+    )
     .innerJoin(sires, and(eq(sires.workspaceId, pairings.workspaceId), eq(sires.id, pairings.sireId)))
     .innerJoin(dams, and(eq(dams.workspaceId, pairings.workspaceId), eq(dams.id, pairings.damId)))
     .where(
@@ -151,7 +184,12 @@ export async function listRefusals(tx: Transaction, ids: readonly AnimalId[]) {
 }
 
 /** Whether the two are already paired in a season, in any project. */
-export async function isPairedInSeason(tx: Transaction, pair: { sireId: AnimalId; damId: AnimalId }, season: number, except?: PairingId): Promise<boolean> {
+export async function isPairedInSeason(
+  tx: Transaction,
+  pair: { sireId: AnimalId; damId: AnimalId },
+  season: number,
+  except?: PairingId,
+): Promise<boolean> {
   const [row] = await tx
     .select({ id: pairings.id })
     .from(pairings)
@@ -167,26 +205,43 @@ export async function isPairedInSeason(tx: Transaction, pair: { sireId: AnimalId
   return row !== undefined;
 }
 
-export async function insertPairing(tx: Transaction, row: typeof pairings.$inferInsert & { id: PairingId }): Promise<void> {
+export async function insertPairing(
+  tx: Transaction,
+  row: typeof pairings.$inferInsert & { id: PairingId },
+): Promise<void> {
   await tx.insert(pairings).values(row);
 }
 
-export async function setPairing(tx: Transaction, id: PairingId, change: Partial<Pick<typeof pairings.$inferInsert, 'status' | 'season'>>): Promise<void> {
+export async function setPairing(
+  tx: Transaction,
+  id: PairingId,
+  change: Partial<Pick<typeof pairings.$inferInsert, 'status' | 'season'>>,
+): Promise<void> {
   await tx
     .update(pairings)
     .set({ ...change, version: sql`${pairings.version} + 1` })
     .where(eq(pairings.id, id));
 }
 
-export async function insertPairingVersion(tx: Transaction, row: typeof pairingVersions.$inferInsert & { id: PairingVersionId }): Promise<void> {
+export async function insertPairingVersion(
+  tx: Transaction,
+  row: typeof pairingVersions.$inferInsert & { id: PairingVersionId },
+): Promise<void> {
   await tx.insert(pairingVersions).values(row);
 }
 
-export async function insertPairingDecision(tx: Transaction, row: typeof pairingDecisions.$inferInsert & { partyId: PartyId }): Promise<void> {
+export async function insertPairingDecision(
+  tx: Transaction,
+  row: typeof pairingDecisions.$inferInsert & { partyId: PartyId },
+): Promise<void> {
   await tx.insert(pairingDecisions).values(row);
 }
 
-export async function lockPairingVersion(tx: Transaction, id: PairingVersionId, seal: { lockedAt: Date; previousHash: string | null; hash: string }): Promise<void> {
+export async function lockPairingVersion(
+  tx: Transaction,
+  id: PairingVersionId,
+  seal: { lockedAt: Date; previousHash: string | null; hash: string },
+): Promise<void> {
   await tx.update(pairingVersions).set(seal).where(eq(pairingVersions.id, id));
 }
 
@@ -195,7 +250,10 @@ export async function lastPairingHash(tx: Transaction, projectId: ProjectId): Pr
   const [row] = await tx
     .select({ hash: pairingVersions.hash })
     .from(pairingVersions)
-    .innerJoin(pairings, and(eq(pairings.workspaceId, pairingVersions.workspaceId), eq(pairings.id, pairingVersions.pairingId)))
+    .innerJoin(
+      pairings,
+      and(eq(pairings.workspaceId, pairingVersions.workspaceId), eq(pairings.id, pairingVersions.pairingId)),
+    )
     .where(and(eq(pairings.projectId, projectId), sql`${pairingVersions.lockedAt} is not null`))
     .orderBy(desc(pairingVersions.lockedAt), desc(pairingVersions.number))
     .limit(1);

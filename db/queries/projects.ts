@@ -25,19 +25,30 @@ function selectProjects(tx: Transaction) {
   return tx
     .select(columns)
     .from(projects)
-    .innerJoin(species, and(eq(species.workspaceId, projects.workspaceId), eq(species.id, projects.speciesId)));
+    .innerJoin(
+      species,
+      and(eq(species.workspaceId, projects.workspaceId), eq(species.id, projects.speciesId)),
+    );
 }
 export type ProjectRecord = NonNullable<Awaited<ReturnType<typeof findProject>>>;
 
 /** The joint projects that are seen, oldest first. */
-export async function listProjectRecords(tx: Transaction, sees: Visibility, filter: { search?: string; ended?: 'yes' | 'no' }) {
+export async function listProjectRecords(
+  tx: Transaction,
+  sees: Visibility,
+  filter: { search?: string; ended?: 'yes' | 'no' },
+) {
   const text = filter.search ? `%${filter.search.replace(/[%_\\]/g, '\\$&')}%` : null;
   return selectProjects(tx)
     .where(
       and(
         inVisibleProject(sees, projects.id),
         text ? ilike(projects.name, text) : undefined,
-        filter.ended === 'yes' ? isNotNull(projects.endedOn) : filter.ended === 'no' ? isNull(projects.endedOn) : undefined,
+        filter.ended === 'yes'
+          ? isNotNull(projects.endedOn)
+          : filter.ended === 'no'
+            ? isNull(projects.endedOn)
+            : undefined,
       ),
     )
     .orderBy(asc(projects.startedOn), asc(projects.name));
@@ -63,7 +74,10 @@ export async function listPartiesOfProjects(tx: Transaction, ids: readonly Proje
       leftOn: projectParties.leftOn,
     })
     .from(projectParties)
-    .innerJoin(parties, and(eq(parties.workspaceId, projectParties.workspaceId), eq(parties.id, projectParties.partyId)))
+    .innerJoin(
+      parties,
+      and(eq(parties.workspaceId, projectParties.workspaceId), eq(parties.id, projectParties.partyId)),
+    )
     .where(inArray(projectParties.projectId, [...ids]))
     .orderBy(asc(projectParties.rank));
 }
@@ -78,11 +92,18 @@ export async function listAnimalsOfProject(tx: Transaction, projectId: ProjectId
       sex: animals.sex,
       status: animals.status,
       hatchedOn: animals.hatchedOn,
-      grams: sql<number | null>`(select w.grams from ${weights} w where w.workspace_id = ${animals.workspaceId} and w.animal_id = ${animals.id} order by w.weighed_on desc, w.id limit 1)`,
-      weighedOn: sql<string | null>`(select w.weighed_on::text from ${weights} w where w.workspace_id = ${animals.workspaceId} and w.animal_id = ${animals.id} order by w.weighed_on desc, w.id limit 1)`,
+      grams: sql<
+        number | null
+      >`(select w.grams from ${weights} w where w.workspace_id = ${animals.workspaceId} and w.animal_id = ${animals.id} order by w.weighed_on desc, w.id limit 1)`,
+      weighedOn: sql<
+        string | null
+      >`(select w.weighed_on::text from ${weights} w where w.workspace_id = ${animals.workspaceId} and w.animal_id = ${animals.id} order by w.weighed_on desc, w.id limit 1)`,
     })
     .from(projectAnimals)
-    .innerJoin(animals, and(eq(animals.workspaceId, projectAnimals.workspaceId), eq(animals.id, projectAnimals.animalId)))
+    .innerJoin(
+      animals,
+      and(eq(animals.workspaceId, projectAnimals.workspaceId), eq(animals.id, projectAnimals.animalId)),
+    )
     .where(eq(projectAnimals.projectId, projectId))
     .orderBy(asc(animals.code));
 }
@@ -93,12 +114,22 @@ export async function listPartsInForce(tx: Transaction, animalIds: readonly Anim
   return tx
     .select({ animalId: ownerships.animalId, partyId: ownershipParts.partyId, parts: ownershipParts.parts })
     .from(ownerships)
-    .innerJoin(ownershipParts, and(eq(ownershipParts.workspaceId, ownerships.workspaceId), eq(ownershipParts.ownershipId, ownerships.id)))
+    .innerJoin(
+      ownershipParts,
+      and(
+        eq(ownershipParts.workspaceId, ownerships.workspaceId),
+        eq(ownershipParts.ownershipId, ownerships.id),
+      ),
+    )
     .where(and(isNull(ownerships.untilDay), inArray(ownerships.animalId, [...animalIds])))
     .orderBy(asc(ownershipParts.partyId));
 }
 
-export async function isProjectNameTaken(tx: Transaction, name: string, except?: ProjectId): Promise<boolean> {
+export async function isProjectNameTaken(
+  tx: Transaction,
+  name: string,
+  except?: ProjectId,
+): Promise<boolean> {
   const [row] = await tx.select({ id: projects.id }).from(projects).where(eq(projects.name, name));
   return row !== undefined && row.id !== except;
 }
@@ -106,15 +137,26 @@ export async function isProjectNameTaken(tx: Transaction, name: string, except?:
 /** Which of these parties there are in the workspace. */
 export async function findParties(tx: Transaction, ids: readonly PartyId[]) {
   if (ids.length === 0) return [];
-  return tx.select({ id: parties.id, name: parties.name, kind: parties.kind }).from(parties).where(inArray(parties.id, [...ids]));
+  return tx
+    .select({ id: parties.id, name: parties.name, kind: parties.kind })
+    .from(parties)
+    .where(inArray(parties.id, [...ids]));
 }
 
-export async function insertProject(tx: Transaction, row: typeof projects.$inferInsert & { id: ProjectId }): Promise<void> {
+export async function insertProject(
+  tx: Transaction,
+  row: typeof projects.$inferInsert & { id: ProjectId },
+): Promise<void> {
   await tx.insert(projects).values(row);
 }
 
 /** @returns whether the row still had the version that was seen */
-export async function updateProject(tx: Transaction, id: ProjectId, seen: number, change: Partial<typeof projects.$inferInsert>): Promise<boolean> {
+export async function updateProject(
+  tx: Transaction,
+  id: ProjectId,
+  seen: number,
+  change: Partial<typeof projects.$inferInsert>,
+): Promise<boolean> {
   const rows = await tx
     .update(projects)
     .set({ ...change, version: seen + 1 })
@@ -124,25 +166,51 @@ export async function updateProject(tx: Transaction, id: ProjectId, seen: number
 }
 
 /** Sets the parties of a project in rank order from a day on; who is no longer among them has left on that day. */
-export async function setProjectParties(tx: Transaction, workspace: Pick<Workspace, 'id'>, projectId: ProjectId, ids: readonly PartyId[], day: string): Promise<void> {
+export async function setProjectParties(
+  tx: Transaction,
+  workspace: Pick<Workspace, 'id'>,
+  projectId: ProjectId,
+  ids: readonly PartyId[],
+  day: string,
+): Promise<void> {
   await tx
     .update(projectParties)
     .set({ leftOn: day })
-    .where(and(eq(projectParties.projectId, projectId), isNull(projectParties.leftOn), notInArray(projectParties.partyId, [...ids])));
+    .where(
+      and(
+        eq(projectParties.projectId, projectId),
+        isNull(projectParties.leftOn),
+        notInArray(projectParties.partyId, [...ids]),
+      ),
+    );
   for (const [index, partyId] of ids.entries()) {
     const rank = index + 1;
     await tx
       .insert(projectParties)
       .values({ workspaceId: workspace.id, projectId, partyId, rank, joinedOn: day })
-      .onConflictDoUpdate({ target: [projectParties.workspaceId, projectParties.projectId, projectParties.partyId], set: { rank, leftOn: null } });
+      .onConflictDoUpdate({
+        target: [projectParties.workspaceId, projectParties.projectId, projectParties.partyId],
+        set: { rank, leftOn: null },
+      });
   }
 }
 
 /** Sets which animals stand in a project. */
-export async function setProjectAnimals(tx: Transaction, workspace: Pick<Workspace, 'id'>, projectId: ProjectId, ids: readonly AnimalId[], day: string): Promise<void> {
+export async function setProjectAnimals(
+  tx: Transaction,
+  workspace: Pick<Workspace, 'id'>,
+  projectId: ProjectId,
+  ids: readonly AnimalId[],
+  day: string,
+): Promise<void> {
   await tx
     .delete(projectAnimals)
-    .where(and(eq(projectAnimals.projectId, projectId), ids.length ? notInArray(projectAnimals.animalId, [...ids]) : undefined));
+    .where(
+      and(
+        eq(projectAnimals.projectId, projectId),
+        ids.length ? notInArray(projectAnimals.animalId, [...ids]) : undefined,
+      ),
+    );
   if (ids.length === 0) return;
   await tx
     .insert(projectAnimals)

@@ -28,8 +28,14 @@ function selectTerms(tx: Transaction) {
       version: termsVersions.version,
     })
     .from(termsVersions)
-    .innerJoin(projects, and(eq(projects.workspaceId, termsVersions.workspaceId), eq(projects.id, termsVersions.projectId)))
-    .innerJoin(members, and(eq(members.workspaceId, termsVersions.workspaceId), eq(members.id, termsVersions.proposedBy)))
+    .innerJoin(
+      projects,
+      and(eq(projects.workspaceId, termsVersions.workspaceId), eq(projects.id, termsVersions.projectId)),
+    )
+    .innerJoin(
+      members,
+      and(eq(members.workspaceId, termsVersions.workspaceId), eq(members.id, termsVersions.proposedBy)),
+    )
     .innerJoin(users, eq(users.id, members.userId));
 }
 export type TermsRecord = NonNullable<Awaited<ReturnType<typeof findTerms>>>;
@@ -43,7 +49,9 @@ export async function listTermsOf(tx: Transaction, projectIds: readonly ProjectI
 }
 
 export async function findTerms(tx: Transaction, sees: Visibility, id: TermsId) {
-  const [row] = await selectTerms(tx).where(and(eq(termsVersions.id, id), inVisibleProject(sees, termsVersions.projectId)));
+  const [row] = await selectTerms(tx).where(
+    and(eq(termsVersions.id, id), inVisibleProject(sees, termsVersions.projectId)),
+  );
   return row ?? null;
 }
 
@@ -65,29 +73,34 @@ export async function listTermsDecisions(tx: Transaction, ids: readonly TermsId[
       decidedAt: termsDecisions.decidedAt,
     })
     .from(termsDecisions)
-    .innerJoin(members, and(eq(members.workspaceId, termsDecisions.workspaceId), eq(members.id, termsDecisions.decidedBy)))
+    .innerJoin(
+      members,
+      and(eq(members.workspaceId, termsDecisions.workspaceId), eq(members.id, termsDecisions.decidedBy)),
+    )
     .innerJoin(users, eq(users.id, members.userId))
     .where(inArray(termsDecisions.termsId, [...ids]))
     .orderBy(asc(termsDecisions.decidedAt));
 }
 
-export async function highestTermsNumber(tx: Transaction, projectId: ProjectId): Promise<number> {
-  const [row] = await tx
-    .select({ number: sql<number>`coalesce(max(${termsVersions.number}), 0)::int` })
-    .from(termsVersions)
-    .where(eq(termsVersions.projectId, projectId));
-  return row?.number ?? 0;
-}
-
-export async function insertTerms(tx: Transaction, row: typeof termsVersions.$inferInsert & { id: TermsId }): Promise<void> {
+export async function insertTerms(
+  tx: Transaction,
+  row: typeof termsVersions.$inferInsert & { id: TermsId },
+): Promise<void> {
   await tx.insert(termsVersions).values(row);
 }
 
-export async function insertTermsDecision(tx: Transaction, row: typeof termsDecisions.$inferInsert & { partyId: PartyId }): Promise<void> {
+export async function insertTermsDecision(
+  tx: Transaction,
+  row: typeof termsDecisions.$inferInsert & { partyId: PartyId },
+): Promise<void> {
   await tx.insert(termsDecisions).values(row);
 }
 
-export async function setTermsStatus(tx: Transaction, id: TermsId, change: Pick<typeof termsVersions.$inferInsert, 'status'> & Partial<typeof termsVersions.$inferInsert>): Promise<void> {
+export async function setTermsStatus(
+  tx: Transaction,
+  id: TermsId,
+  change: Pick<typeof termsVersions.$inferInsert, 'status'> & Partial<typeof termsVersions.$inferInsert>,
+): Promise<void> {
   await tx
     .update(termsVersions)
     .set({ ...change, version: sql`${termsVersions.version} + 1` })

@@ -10,7 +10,8 @@ import { projectAnimals } from '../schema/projects';
  * What a member may see of a workspace. Row-level security holds the border of the workspace; this narrows inside it,
  * for partners, to the projects they are in, the animals they hold a part of and their own party.
  */
-export type Visibility = { everything: true } | { everything: false; partyId: PartyId | null; projectIds: ProjectId[] };
+export type Visibility =
+  { everything: true } | { everything: false; partyId: PartyId | null; projectIds: ProjectId[] };
 
 /** Condition on a column with a project's id. Rows without a project are seen only by who sees everything. */
 export function inVisibleProject(sees: Visibility, column: AnyPgColumn): SQL | undefined {
@@ -19,7 +20,7 @@ export function inVisibleProject(sees: Visibility, column: AnyPgColumn): SQL | u
 }
 
 /** Condition on a column with a party's id: the member's own party only, unless everything is seen. */
-export function ofVisibleParty(sees: Visibility, column: AnyPgColumn): SQL | undefined {
+function ofVisibleParty(sees: Visibility, column: AnyPgColumn): SQL | undefined {
   if (sees.everything) return undefined;
   return sees.partyId ? eq(column, sees.partyId) : sql`false`;
 }
@@ -37,7 +38,13 @@ export function visibleAnimal(tx: Transaction, sees: Visibility): SQL | undefine
   const held = tx
     .select({ id: ownerships.animalId })
     .from(ownerships)
-    .innerJoin(ownershipParts, and(eq(ownershipParts.workspaceId, ownerships.workspaceId), eq(ownershipParts.ownershipId, ownerships.id)))
+    .innerJoin(
+      ownershipParts,
+      and(
+        eq(ownershipParts.workspaceId, ownerships.workspaceId),
+        eq(ownershipParts.ownershipId, ownerships.id),
+      ),
+    )
     .where(and(ofVisibleParty(sees, ownershipParts.partyId), isNull(ownerships.untilDay)));
   return or(inArray(animals.id, inProject), hatchedInProject, inArray(animals.id, held));
 }

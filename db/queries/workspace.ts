@@ -9,7 +9,10 @@ import { members, parties, workspaces } from '../schema/workspace';
 import { inVisibleProject, type Visibility } from './visibility';
 
 /** The workspaces a person is a member of today, by name. */
-export async function workspacesOfPerson(tx: Transaction, userId: UserId): Promise<{ slug: string; name: string; role: Role }[]> {
+export async function workspacesOfPerson(
+  tx: Transaction,
+  userId: UserId,
+): Promise<{ slug: string; name: string; role: Role }[]> {
   return tx
     .select({ slug: workspaces.slug, name: workspaces.name, role: members.role })
     .from(members)
@@ -34,14 +37,28 @@ export async function listProjectsWithParties(tx: Transaction, sees: Visibility)
     .orderBy(asc(projects.startedOn), asc(projects.name));
   const sides = rows.length
     ? await tx
-        .select({ projectId: projectParties.projectId, partyId: projectParties.partyId, rank: projectParties.rank })
+        .select({
+          projectId: projectParties.projectId,
+          partyId: projectParties.partyId,
+          rank: projectParties.rank,
+        })
         .from(projectParties)
-        .where(and(isNull(projectParties.leftOn), inArray(projectParties.projectId, rows.map((row) => row.id))))
+        .where(
+          and(
+            isNull(projectParties.leftOn),
+            inArray(
+              projectParties.projectId,
+              rows.map((row) => row.id),
+            ),
+          ),
+        )
         .orderBy(asc(projectParties.rank))
     : [];
   return rows.map((row) => ({
     ...row,
-    parties: sides.filter((side) => side.projectId === row.id).map(({ partyId, rank }) => ({ partyId, rank })),
+    parties: sides
+      .filter((side) => side.projectId === row.id)
+      .map(({ partyId, rank }) => ({ partyId, rank })),
   }));
 }
 

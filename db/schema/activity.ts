@@ -1,4 +1,15 @@
-import { bigserial, foreignKey, index, integer, jsonb, pgTable, primaryKey, text, timestamp, uuid } from 'drizzle-orm/pg-core';
+import {
+  bigserial,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  timestamp,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { sql } from 'drizzle-orm';
 import type { ContactId, MailId, MemberId, NotificationId, WorkspaceId } from '@/lib/contracts/ids';
 import { createdAt, moment, tenantPolicy, workspaceColumn } from './columns';
@@ -25,7 +36,11 @@ export const auditLog = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.sequence] }),
     index('audit_log_subject').on(t.workspaceId, t.subjectKind, t.subjectId),
-    foreignKey({ name: 'audit_log_member', columns: [t.workspaceId, t.memberId], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'audit_log_member',
+      columns: [t.workspaceId, t.memberId],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('audit_log'),
   ],
 );
@@ -45,7 +60,11 @@ export const comments = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('comments_subject').on(t.workspaceId, t.subjectKind, t.subjectId, t.createdAt),
-    foreignKey({ name: 'comments_member', columns: [t.workspaceId, t.memberId], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'comments_member',
+      columns: [t.workspaceId, t.memberId],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('comments'),
   ],
 );
@@ -68,7 +87,11 @@ export const notifications = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('notifications_member').on(t.workspaceId, t.memberId, t.createdAt),
-    foreignKey({ name: 'notifications_member_fk', columns: [t.workspaceId, t.memberId], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'notifications_member_fk',
+      columns: [t.workspaceId, t.memberId],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('notifications'),
   ],
 );

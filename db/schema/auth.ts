@@ -20,7 +20,10 @@ export const sessions = pgTable(
   {
     id: text('id').primaryKey(),
     token: text('token').notNull().unique(),
-    userId: text('user_id').$type<UserId>().notNull().references(() => users.id, { onDelete: 'cascade' }),
+    userId: text('user_id')
+      .$type<UserId>()
+      .notNull()
+      .references(() => users.id, { onDelete: 'cascade' }),
     expiresAt: moment('expires_at').notNull(),
     ipAddress: text('ip_address'),
     userAgent: text('user_agent'),
@@ -36,7 +39,10 @@ export const credentials = pgTable(
     id: text('id').primaryKey(),
     accountId: text('account_id').notNull(),
     providerId: text('provider_id').notNull(),
-    userId: text('user_id').$type<UserId>().notNull().references(() => users.id, { onDelete: 'cascade' }),
+    userId: text('user_id')
+      .$type<UserId>()
+      .notNull()
+      .references(() => users.id, { onDelete: 'cascade' }),
     accessToken: text('access_token'),
     refreshToken: text('refresh_token'),
     idToken: text('id_token'),
@@ -69,7 +75,10 @@ export const twoFactors = pgTable(
     id: text('id').primaryKey(),
     secret: text('secret').notNull(),
     backupCodes: text('backup_codes').notNull(),
-    userId: text('user_id').$type<UserId>().notNull().references(() => users.id, { onDelete: 'cascade' }),
+    userId: text('user_id')
+      .$type<UserId>()
+      .notNull()
+      .references(() => users.id, { onDelete: 'cascade' }),
     verified: boolean('verified').notNull().default(true),
     failedVerificationCount: integer('failed_verification_count').notNull().default(0),
     lockedUntil: moment('locked_until'),

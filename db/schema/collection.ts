@@ -1,6 +1,31 @@
 import { sql } from 'drizzle-orm';
-import { boolean, check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uniqueIndex, uuid, type AnyPgColumn } from 'drizzle-orm/pg-core';
-import type { AnimalId, ClutchId, DocumentId, LocusId, MemberId, PartyId, PhotoId, SpeciesId, TubId } from '@/lib/contracts/ids';
+import {
+  boolean,
+  check,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  smallint,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+  type AnyPgColumn,
+} from 'drizzle-orm/pg-core';
+import type {
+  AnimalId,
+  ClutchId,
+  DocumentId,
+  LocusId,
+  MemberId,
+  PartyId,
+  PhotoId,
+  SpeciesId,
+  TubId,
+} from '@/lib/contracts/ids';
 import type { AnimalOrigin, AnimalStatus, LocusClaim, OwnershipReason, Sex } from '@/lib/contracts/animal';
 import { createdAt, day, minorUnits, moment, tenantPolicy, versionColumn, workspaceColumn } from './columns';
 import { loci, species } from './genetics';
@@ -17,7 +42,10 @@ export const tubs = pgTable(
     label: text('label').notNull(),
     rowNumber: smallint('row_number').notNull(),
     columnNumber: smallint('column_number').notNull(),
-    purpose: text('purpose').$type<'adult' | 'grower' | 'hatchling' | 'incubator' | 'quarantine'>().notNull().default('adult'),
+    purpose: text('purpose')
+      .$type<'adult' | 'grower' | 'hatchling' | 'incubator' | 'quarantine'>()
+      .notNull()
+      .default('adult'),
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
@@ -61,12 +89,31 @@ export const animals = pgTable(
     index('animals_dam').on(t.workspaceId, t.damId),
     index('animals_sire').on(t.workspaceId, t.sireId),
     index('animals_clutch').on(t.workspaceId, t.clutchId),
-    foreignKey({ name: 'animals_species_fk', columns: [t.workspaceId, t.speciesId], foreignColumns: [species.workspaceId, species.id] }),
-    foreignKey({ name: 'animals_dam_fk', columns: [t.workspaceId, t.damId], foreignColumns: [t.workspaceId, t.id] as [AnyPgColumn, AnyPgColumn] }),
-    foreignKey({ name: 'animals_sire_fk', columns: [t.workspaceId, t.sireId], foreignColumns: [t.workspaceId, t.id] as [AnyPgColumn, AnyPgColumn] }),
-    foreignKey({ name: 'animals_tub_fk', columns: [t.workspaceId, t.tubId], foreignColumns: [tubs.workspaceId, tubs.id] }),
+    foreignKey({
+      name: 'animals_species_fk',
+      columns: [t.workspaceId, t.speciesId],
+      foreignColumns: [species.workspaceId, species.id],
+    }),
+    foreignKey({
+      name: 'animals_dam_fk',
+      columns: [t.workspaceId, t.damId],
+      foreignColumns: [t.workspaceId, t.id] as [AnyPgColumn, AnyPgColumn],
+    }),
+    foreignKey({
+      name: 'animals_sire_fk',
+      columns: [t.workspaceId, t.sireId],
+      foreignColumns: [t.workspaceId, t.id] as [AnyPgColumn, AnyPgColumn],
+    }),
+    foreignKey({
+      name: 'animals_tub_fk',
+      columns: [t.workspaceId, t.tubId],
+      foreignColumns: [tubs.workspaceId, tubs.id],
+    }),
     check('animals_sex', sql`${t.sex} in ('male', 'female', 'unknown')`),
-    check('animals_not_own_parent', sql`${t.damId} is distinct from ${t.id} and ${t.sireId} is distinct from ${t.id}`),
+    check(
+      'animals_not_own_parent',
+      sql`${t.damId} is distinct from ${t.id} and ${t.sireId} is distinct from ${t.id}`,
+    ),
     tenantPolicy('animals'),
   ],
 );
@@ -82,8 +129,16 @@ export const possibleSires = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.animalId, t.sireId] }),
-    foreignKey({ name: 'possible_sires_animal', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'possible_sires_sire', columns: [t.workspaceId, t.sireId], foreignColumns: [animals.workspaceId, animals.id] }),
+    foreignKey({
+      name: 'possible_sires_animal',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'possible_sires_sire',
+      columns: [t.workspaceId, t.sireId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
     check('possible_sires_weight', sql`${t.weight} > 0`),
     tenantPolicy('possible_sires'),
   ],
@@ -101,8 +156,16 @@ export const animalLoci = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.animalId, t.locusId] }),
-    foreignKey({ name: 'animal_loci_animal', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'animal_loci_locus', columns: [t.workspaceId, t.locusId], foreignColumns: [loci.workspaceId, loci.id] }),
+    foreignKey({
+      name: 'animal_loci_animal',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'animal_loci_locus',
+      columns: [t.workspaceId, t.locusId],
+      foreignColumns: [loci.workspaceId, loci.id],
+    }),
     tenantPolicy('animal_loci'),
   ],
 );
@@ -128,10 +191,20 @@ export const ownerships = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
-    uniqueIndex('ownerships_one_in_force').on(t.workspaceId, t.animalId).where(sql`until_day is null`),
+    uniqueIndex('ownerships_one_in_force')
+      .on(t.workspaceId, t.animalId)
+      .where(sql`until_day is null`),
     index('ownerships_animal').on(t.workspaceId, t.animalId, t.fromDay),
-    foreignKey({ name: 'ownerships_animal_fk', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'ownerships_recorded_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'ownerships_animal_fk',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'ownerships_recorded_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('ownerships_order', sql`${t.untilDay} is null or ${t.untilDay} >= ${t.fromDay}`),
     tenantPolicy('ownerships'),
   ],
@@ -148,8 +221,16 @@ export const ownershipParts = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.ownershipId, t.partyId] }),
     index('ownership_parts_party').on(t.workspaceId, t.partyId),
-    foreignKey({ name: 'ownership_parts_ownership', columns: [t.workspaceId, t.ownershipId], foreignColumns: [ownerships.workspaceId, ownerships.id] }),
-    foreignKey({ name: 'ownership_parts_party_fk', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
+    foreignKey({
+      name: 'ownership_parts_ownership',
+      columns: [t.workspaceId, t.ownershipId],
+      foreignColumns: [ownerships.workspaceId, ownerships.id],
+    }),
+    foreignKey({
+      name: 'ownership_parts_party_fk',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
     check('ownership_parts_positive', sql`${t.parts} > 0`),
     tenantPolicy('ownership_parts'),
   ],
@@ -168,8 +249,16 @@ export const weights = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('weights_animal').on(t.workspaceId, t.animalId, t.weighedOn),
-    foreignKey({ name: 'weights_animal_fk', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'weights_recorded_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'weights_animal_fk',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'weights_recorded_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('weights_positive', sql`${t.grams} > 0`),
     tenantPolicy('weights'),
   ],
@@ -195,7 +284,11 @@ export const photos = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('photos_animal').on(t.workspaceId, t.animalId, t.position),
-    foreignKey({ name: 'photos_animal_fk', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
+    foreignKey({
+      name: 'photos_animal_fk',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
     tenantPolicy('photos'),
   ],
 );
@@ -219,7 +312,11 @@ export const documents = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('documents_subject').on(t.workspaceId, t.subjectKind, t.subjectId),
-    foreignKey({ name: 'documents_uploaded_by', columns: [t.workspaceId, t.uploadedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'documents_uploaded_by',
+      columns: [t.workspaceId, t.uploadedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('documents'),
   ],
 );

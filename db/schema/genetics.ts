@@ -43,7 +43,11 @@ export const loci = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('loci_name').on(t.workspaceId, t.speciesId, t.name),
-    foreignKey({ name: 'loci_species', columns: [t.workspaceId, t.speciesId], foreignColumns: [species.workspaceId, species.id] }),
+    foreignKey({
+      name: 'loci_species',
+      columns: [t.workspaceId, t.speciesId],
+      foreignColumns: [species.workspaceId, species.id],
+    }),
     tenantPolicy('loci'),
   ],
 );
@@ -63,7 +67,11 @@ export const combinations = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('combinations_name').on(t.workspaceId, t.speciesId, t.name),
-    foreignKey({ name: 'combinations_species', columns: [t.workspaceId, t.speciesId], foreignColumns: [species.workspaceId, species.id] }),
+    foreignKey({
+      name: 'combinations_species',
+      columns: [t.workspaceId, t.speciesId],
+      foreignColumns: [species.workspaceId, species.id],
+    }),
     tenantPolicy('combinations'),
   ],
 );

@@ -1,6 +1,33 @@
 import { sql } from 'drizzle-orm';
-import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uuid, type AnyPgColumn } from 'drizzle-orm/pg-core';
-import type { AccountId, AnimalId, ClutchId, EntryId, ExpenseId, InvoiceId, MemberId, PartyId, PaymentId, ProjectId, RefundId, SettlementId, TermsId } from '@/lib/contracts/ids';
+import {
+  check,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  smallint,
+  text,
+  unique,
+  uuid,
+  type AnyPgColumn,
+} from 'drizzle-orm/pg-core';
+import type {
+  AccountId,
+  AnimalId,
+  ClutchId,
+  EntryId,
+  ExpenseId,
+  InvoiceId,
+  MemberId,
+  PartyId,
+  PaymentId,
+  ProjectId,
+  RefundId,
+  SettlementId,
+  TermsId,
+} from '@/lib/contracts/ids';
 import type { AccountPurpose, AccountType, EntryCauseKind } from '@/lib/contracts/ledger-kinds';
 import { createdAt, day, minorUnits, moment, tenantPolicy, versionColumn, workspaceColumn } from './columns';
 import { projects, termsVersions } from './projects';
@@ -25,7 +52,11 @@ export const accounts = pgTable(
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('accounts_code').on(t.workspaceId, t.code),
     unique('accounts_purpose').on(t.workspaceId, t.purpose, t.partyId).nullsNotDistinct(),
-    foreignKey({ name: 'accounts_party', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
+    foreignKey({
+      name: 'accounts_party',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
     check('accounts_type', sql`${t.type} in ('asset', 'liability', 'equity', 'revenue', 'expense')`),
     tenantPolicy('accounts'),
   ],
@@ -54,8 +85,16 @@ export const entries = pgTable(
     unique('entries_reversed_once').on(t.workspaceId, t.reversesId),
     index('entries_posted').on(t.workspaceId, t.postedOn),
     index('entries_cause').on(t.workspaceId, t.causeKind, t.causeId),
-    foreignKey({ name: 'entries_reverses', columns: [t.workspaceId, t.reversesId], foreignColumns: [t.workspaceId, t.id] as [AnyPgColumn, AnyPgColumn] }),
-    foreignKey({ name: 'entries_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'entries_reverses',
+      columns: [t.workspaceId, t.reversesId],
+      foreignColumns: [t.workspaceId, t.id] as [AnyPgColumn, AnyPgColumn],
+    }),
+    foreignKey({
+      name: 'entries_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('entries'),
   ],
 );
@@ -80,10 +119,26 @@ export const postings = pgTable(
     primaryKey({ columns: [t.workspaceId, t.entryId, t.line] }),
     index('postings_account').on(t.workspaceId, t.accountId),
     index('postings_party').on(t.workspaceId, t.partyId),
-    foreignKey({ name: 'postings_entry', columns: [t.workspaceId, t.entryId], foreignColumns: [entries.workspaceId, entries.id] }),
-    foreignKey({ name: 'postings_account_fk', columns: [t.workspaceId, t.accountId], foreignColumns: [accounts.workspaceId, accounts.id] }),
-    foreignKey({ name: 'postings_party_fk', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'postings_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
+    foreignKey({
+      name: 'postings_entry',
+      columns: [t.workspaceId, t.entryId],
+      foreignColumns: [entries.workspaceId, entries.id],
+    }),
+    foreignKey({
+      name: 'postings_account_fk',
+      columns: [t.workspaceId, t.accountId],
+      foreignColumns: [accounts.workspaceId, accounts.id],
+    }),
+    foreignKey({
+      name: 'postings_party_fk',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'postings_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
     check('postings_amount', sql`${t.amount} between 1 and 9007199254740991`),
     check('postings_side', sql`${t.side} in ('debit', 'credit')`),
     tenantPolicy('postings'),
@@ -108,11 +163,31 @@ export const saleSplits = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('sale_splits_invoice').on(t.workspaceId, t.invoiceId),
-    foreignKey({ name: 'sale_splits_invoice_fk', columns: [t.workspaceId, t.invoiceId], foreignColumns: [invoices.workspaceId, invoices.id] }),
-    foreignKey({ name: 'sale_splits_payment', columns: [t.workspaceId, t.paymentId], foreignColumns: [payments.workspaceId, payments.id] }),
-    foreignKey({ name: 'sale_splits_refund', columns: [t.workspaceId, t.refundId], foreignColumns: [refunds.workspaceId, refunds.id] }),
-    foreignKey({ name: 'sale_splits_terms', columns: [t.workspaceId, t.termsId], foreignColumns: [termsVersions.workspaceId, termsVersions.id] }),
-    foreignKey({ name: 'sale_splits_entry', columns: [t.workspaceId, t.entryId], foreignColumns: [entries.workspaceId, entries.id] }),
+    foreignKey({
+      name: 'sale_splits_invoice_fk',
+      columns: [t.workspaceId, t.invoiceId],
+      foreignColumns: [invoices.workspaceId, invoices.id],
+    }),
+    foreignKey({
+      name: 'sale_splits_payment',
+      columns: [t.workspaceId, t.paymentId],
+      foreignColumns: [payments.workspaceId, payments.id],
+    }),
+    foreignKey({
+      name: 'sale_splits_refund',
+      columns: [t.workspaceId, t.refundId],
+      foreignColumns: [refunds.workspaceId, refunds.id],
+    }),
+    foreignKey({
+      name: 'sale_splits_terms',
+      columns: [t.workspaceId, t.termsId],
+      foreignColumns: [termsVersions.workspaceId, termsVersions.id],
+    }),
+    foreignKey({
+      name: 'sale_splits_entry',
+      columns: [t.workspaceId, t.entryId],
+      foreignColumns: [entries.workspaceId, entries.id],
+    }),
     tenantPolicy('sale_splits'),
   ],
 );
@@ -124,7 +199,9 @@ export const expenses = pgTable(
     id: uuid('id').$type<ExpenseId>().notNull().defaultRandom(),
     spentOn: day('spent_on').notNull(),
     description: text('description').notNull(),
-    category: text('category').$type<'feed' | 'veterinary' | 'equipment' | 'power' | 'shipping' | 'other'>().notNull(),
+    category: text('category')
+      .$type<'feed' | 'veterinary' | 'equipment' | 'power' | 'shipping' | 'other'>()
+      .notNull(),
     amount: minorUnits('amount').notNull(),
     /** Who paid; the house when null. */
     paidBy: uuid('paid_by').$type<PartyId>(),
@@ -141,9 +218,21 @@ export const expenses = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('expenses_project').on(t.workspaceId, t.projectId),
-    foreignKey({ name: 'expenses_paid_by', columns: [t.workspaceId, t.paidBy], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'expenses_project_fk', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
-    foreignKey({ name: 'expenses_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'expenses_paid_by',
+      columns: [t.workspaceId, t.paidBy],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'expenses_project_fk',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
+    foreignKey({
+      name: 'expenses_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('expenses_amounts', sql`${t.amount} > 0 and ${t.recovered} between 0 and ${t.amount}`),
     tenantPolicy('expenses'),
   ],
@@ -158,7 +247,10 @@ export const settlements = pgTable(
     fromDay: day('from_day').notNull(),
     throughDay: day('through_day').notNull(),
     projectId: uuid('project_id').$type<ProjectId>(),
-    status: text('status').$type<'proposed' | 'agreed' | 'paid' | 'withdrawn'>().notNull().default('proposed'),
+    status: text('status')
+      .$type<'proposed' | 'agreed' | 'paid' | 'withdrawn'>()
+      .notNull()
+      .default('proposed'),
     /** Statements and transfers as they were computed; `hash` is the SHA-256 of its canonical JSON. */
     snapshot: jsonb('snapshot').notNull(),
     hash: text('hash').notNull(),
@@ -169,8 +261,16 @@ export const settlements = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('settlements_number').on(t.workspaceId, t.number),
-    foreignKey({ name: 'settlements_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
-    foreignKey({ name: 'settlements_by', columns: [t.workspaceId, t.createdBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'settlements_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
+    foreignKey({
+      name: 'settlements_by',
+      columns: [t.workspaceId, t.createdBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('settlements'),
   ],
 );
@@ -188,9 +288,21 @@ export const settlementDecisions = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.settlementId, t.partyId] }),
-    foreignKey({ name: 'settlement_decisions_settlement', columns: [t.workspaceId, t.settlementId], foreignColumns: [settlements.workspaceId, settlements.id] }),
-    foreignKey({ name: 'settlement_decisions_party', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'settlement_decisions_by', columns: [t.workspaceId, t.decidedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'settlement_decisions_settlement',
+      columns: [t.workspaceId, t.settlementId],
+      foreignColumns: [settlements.workspaceId, settlements.id],
+    }),
+    foreignKey({
+      name: 'settlement_decisions_party',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'settlement_decisions_by',
+      columns: [t.workspaceId, t.decidedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('settlement_decisions'),
   ],
 );
@@ -211,10 +323,26 @@ export const settlementTransfers = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
-    foreignKey({ name: 'settlement_transfers_settlement', columns: [t.workspaceId, t.settlementId], foreignColumns: [settlements.workspaceId, settlements.id] }),
-    foreignKey({ name: 'settlement_transfers_from', columns: [t.workspaceId, t.fromParty], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'settlement_transfers_to', columns: [t.workspaceId, t.toParty], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'settlement_transfers_entry', columns: [t.workspaceId, t.entryId], foreignColumns: [entries.workspaceId, entries.id] }),
+    foreignKey({
+      name: 'settlement_transfers_settlement',
+      columns: [t.workspaceId, t.settlementId],
+      foreignColumns: [settlements.workspaceId, settlements.id],
+    }),
+    foreignKey({
+      name: 'settlement_transfers_from',
+      columns: [t.workspaceId, t.fromParty],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'settlement_transfers_to',
+      columns: [t.workspaceId, t.toParty],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'settlement_transfers_entry',
+      columns: [t.workspaceId, t.entryId],
+      foreignColumns: [entries.workspaceId, entries.id],
+    }),
     check('settlement_transfers_positive', sql`${t.amount} > 0`),
     tenantPolicy('settlement_transfers'),
   ],

@@ -1,5 +1,18 @@
 import { sql } from 'drizzle-orm';
-import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  check,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  smallint,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import type { AnimalId, MemberId, PartyId, ProjectId, SpeciesId, TermsId } from '@/lib/contracts/ids';
 import type { TermsContent } from '@/lib/contracts/terms-content';
 import { animals } from './collection';
@@ -23,7 +36,11 @@ export const projects = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('projects_name').on(t.workspaceId, t.name),
-    foreignKey({ name: 'projects_species', columns: [t.workspaceId, t.speciesId], foreignColumns: [species.workspaceId, species.id] }),
+    foreignKey({
+      name: 'projects_species',
+      columns: [t.workspaceId, t.speciesId],
+      foreignColumns: [species.workspaceId, species.id],
+    }),
     tenantPolicy('projects'),
   ],
 );
@@ -42,8 +59,16 @@ export const projectParties = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.projectId, t.partyId] }),
     index('project_parties_party').on(t.workspaceId, t.partyId),
-    foreignKey({ name: 'project_parties_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
-    foreignKey({ name: 'project_parties_party_fk', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
+    foreignKey({
+      name: 'project_parties_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
+    foreignKey({
+      name: 'project_parties_party_fk',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
     tenantPolicy('project_parties'),
   ],
 );
@@ -59,8 +84,16 @@ export const projectAnimals = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.projectId, t.animalId] }),
     index('project_animals_animal').on(t.workspaceId, t.animalId),
-    foreignKey({ name: 'project_animals_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
-    foreignKey({ name: 'project_animals_animal_fk', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
+    foreignKey({
+      name: 'project_animals_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
+    foreignKey({
+      name: 'project_animals_animal_fk',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
     tenantPolicy('project_animals'),
   ],
 );
@@ -91,9 +124,19 @@ export const termsVersions = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('terms_versions_number').on(t.workspaceId, t.projectId, t.number),
-    uniqueIndex('terms_versions_one_open').on(t.workspaceId, t.projectId).where(sql`status in ('draft', 'proposed')`),
-    foreignKey({ name: 'terms_versions_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
-    foreignKey({ name: 'terms_versions_proposed_by', columns: [t.workspaceId, t.proposedBy], foreignColumns: [members.workspaceId, members.id] }),
+    uniqueIndex('terms_versions_one_open')
+      .on(t.workspaceId, t.projectId)
+      .where(sql`status in ('draft', 'proposed')`),
+    foreignKey({
+      name: 'terms_versions_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
+    foreignKey({
+      name: 'terms_versions_proposed_by',
+      columns: [t.workspaceId, t.proposedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('terms_versions_locked', sql`(${t.status} = 'agreed') = (${t.lockedAt} is not null)`),
     tenantPolicy('terms_versions'),
   ],
@@ -114,9 +157,21 @@ export const termsDecisions = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('terms_decisions_terms').on(t.workspaceId, t.termsId, t.decidedAt),
-    foreignKey({ name: 'terms_decisions_terms_fk', columns: [t.workspaceId, t.termsId], foreignColumns: [termsVersions.workspaceId, termsVersions.id] }),
-    foreignKey({ name: 'terms_decisions_party', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'terms_decisions_by', columns: [t.workspaceId, t.decidedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'terms_decisions_terms_fk',
+      columns: [t.workspaceId, t.termsId],
+      foreignColumns: [termsVersions.workspaceId, termsVersions.id],
+    }),
+    foreignKey({
+      name: 'terms_decisions_party',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'terms_decisions_by',
+      columns: [t.workspaceId, t.decidedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('terms_decisions'),
   ],
 );

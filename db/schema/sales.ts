@@ -1,9 +1,46 @@
 import { sql } from 'drizzle-orm';
-import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uuid } from 'drizzle-orm/pg-core';
-import type { AnimalId, ContactId, InvoiceId, ListingId, MemberId, PaymentId, ProjectId, RefundId } from '@/lib/contracts/ids';
-import type { ContactAddress, ContactEventKind, InvoiceStatus, ListingState, PaymentMethod } from '@/lib/contracts/sale-states';
+import {
+  check,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  smallint,
+  text,
+  unique,
+  uuid,
+} from 'drizzle-orm/pg-core';
+import type {
+  AnimalId,
+  ContactId,
+  InvoiceId,
+  ListingId,
+  MemberId,
+  PaymentId,
+  ProjectId,
+  RefundId,
+} from '@/lib/contracts/ids';
+import type {
+  ContactAddress,
+  ContactEventKind,
+  InvoiceStatus,
+  ListingState,
+  PaymentMethod,
+} from '@/lib/contracts/sale-states';
 import { animals } from './collection';
-import { announcedEmail, announcedLink, createdAt, day, minorUnits, moment, tenantPolicy, versionColumn, workspaceColumn } from './columns';
+import {
+  announcedEmail,
+  announcedLink,
+  createdAt,
+  day,
+  minorUnits,
+  moment,
+  tenantPolicy,
+  versionColumn,
+  workspaceColumn,
+} from './columns';
 import { projects } from './projects';
 import { members, workspaces } from './workspace';
 
@@ -16,8 +53,14 @@ export const contacts = pgTable(
     email: text('email'),
     phone: text('phone').notNull().default(''),
     address: jsonb('address').$type<ContactAddress>().notNull(),
-    kind: text('kind').$type<'buyer' | 'breeder' | 'veterinarian' | 'supplier' | 'carrier' | 'other'>().notNull().default('buyer'),
-    tags: text('tags').array().notNull().default(sql`'{}'::text[]`),
+    kind: text('kind')
+      .$type<'buyer' | 'breeder' | 'veterinarian' | 'supplier' | 'carrier' | 'other'>()
+      .notNull()
+      .default('buyer'),
+    tags: text('tags')
+      .array()
+      .notNull()
+      .default(sql`'{}'::text[]`),
     note: text('note').notNull().default(''),
     followUpOn: day('follow_up_on'),
     followUpNote: text('follow_up_note').notNull().default(''),
@@ -47,8 +90,16 @@ export const contactEvents = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('contact_events_contact').on(t.workspaceId, t.contactId, t.happenedAt),
-    foreignKey({ name: 'contact_events_contact_fk', columns: [t.workspaceId, t.contactId], foreignColumns: [contacts.workspaceId, contacts.id] }),
-    foreignKey({ name: 'contact_events_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'contact_events_contact_fk',
+      columns: [t.workspaceId, t.contactId],
+      foreignColumns: [contacts.workspaceId, contacts.id],
+    }),
+    foreignKey({
+      name: 'contact_events_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('contact_events'),
   ],
 );
@@ -71,8 +122,16 @@ export const listings = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('listings_animal').on(t.workspaceId, t.animalId),
-    foreignKey({ name: 'listings_animal_fk', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'listings_held_for', columns: [t.workspaceId, t.heldFor], foreignColumns: [contacts.workspaceId, contacts.id] }),
+    foreignKey({
+      name: 'listings_animal_fk',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'listings_held_for',
+      columns: [t.workspaceId, t.heldFor],
+      foreignColumns: [contacts.workspaceId, contacts.id],
+    }),
     check('listings_price', sql`${t.price} is null or ${t.price} between 0 and 9007199254740991`),
     tenantPolicy('listings'),
   ],
@@ -111,9 +170,20 @@ export const invoices = pgTable(
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('invoices_number').on(t.workspaceId, t.number),
     index('invoices_contact').on(t.workspaceId, t.contactId),
-    foreignKey({ name: 'invoices_contact_fk', columns: [t.workspaceId, t.contactId], foreignColumns: [contacts.workspaceId, contacts.id] }),
-    foreignKey({ name: 'invoices_created_by', columns: [t.workspaceId, t.createdBy], foreignColumns: [members.workspaceId, members.id] }),
-    check('invoices_adds_up', sql`${t.subtotal} - ${t.discount} + ${t.shipping} + ${t.tax} = ${t.total} and ${t.total} between 0 and 9007199254740991`),
+    foreignKey({
+      name: 'invoices_contact_fk',
+      columns: [t.workspaceId, t.contactId],
+      foreignColumns: [contacts.workspaceId, contacts.id],
+    }),
+    foreignKey({
+      name: 'invoices_created_by',
+      columns: [t.workspaceId, t.createdBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
+    check(
+      'invoices_adds_up',
+      sql`${t.subtotal} - ${t.discount} + ${t.shipping} + ${t.tax} = ${t.total} and ${t.total} between 0 and 9007199254740991`,
+    ),
     check('invoices_paid', sql`${t.paid} >= 0 and ${t.refunded} between 0 and ${t.paid}`),
     tenantPolicy('invoices', sql`link_hash = ${announcedLink}`),
   ],
@@ -137,9 +207,21 @@ export const invoiceLines = pgTable(
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('invoice_lines_position').on(t.workspaceId, t.invoiceId, t.position),
     index('invoice_lines_animal').on(t.workspaceId, t.animalId),
-    foreignKey({ name: 'invoice_lines_invoice', columns: [t.workspaceId, t.invoiceId], foreignColumns: [invoices.workspaceId, invoices.id] }),
-    foreignKey({ name: 'invoice_lines_animal_fk', columns: [t.workspaceId, t.animalId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'invoice_lines_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
+    foreignKey({
+      name: 'invoice_lines_invoice',
+      columns: [t.workspaceId, t.invoiceId],
+      foreignColumns: [invoices.workspaceId, invoices.id],
+    }),
+    foreignKey({
+      name: 'invoice_lines_animal_fk',
+      columns: [t.workspaceId, t.animalId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'invoice_lines_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
     check('invoice_lines_animal_named', sql`(${t.kind} = 'animal') = (${t.animalId} is not null)`),
     tenantPolicy('invoice_lines'),
   ],
@@ -161,7 +243,11 @@ export const instalments = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('instalments_position').on(t.workspaceId, t.invoiceId, t.position),
-    foreignKey({ name: 'instalments_invoice', columns: [t.workspaceId, t.invoiceId], foreignColumns: [invoices.workspaceId, invoices.id] }),
+    foreignKey({
+      name: 'instalments_invoice',
+      columns: [t.workspaceId, t.invoiceId],
+      foreignColumns: [invoices.workspaceId, invoices.id],
+    }),
     check('instalments_positive', sql`${t.amount} > 0`),
     tenantPolicy('instalments'),
   ],
@@ -184,7 +270,11 @@ export const checkouts = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('checkouts_attempt').on(t.workspaceId, t.invoiceId, t.attempt),
-    foreignKey({ name: 'checkouts_invoice', columns: [t.workspaceId, t.invoiceId], foreignColumns: [invoices.workspaceId, invoices.id] }),
+    foreignKey({
+      name: 'checkouts_invoice',
+      columns: [t.workspaceId, t.invoiceId],
+      foreignColumns: [invoices.workspaceId, invoices.id],
+    }),
     tenantPolicy('checkouts'),
   ],
 );
@@ -210,8 +300,16 @@ export const payments = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('payments_invoice').on(t.workspaceId, t.invoiceId),
-    foreignKey({ name: 'payments_invoice_fk', columns: [t.workspaceId, t.invoiceId], foreignColumns: [invoices.workspaceId, invoices.id] }),
-    foreignKey({ name: 'payments_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'payments_invoice_fk',
+      columns: [t.workspaceId, t.invoiceId],
+      foreignColumns: [invoices.workspaceId, invoices.id],
+    }),
+    foreignKey({
+      name: 'payments_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('payments_positive', sql`${t.amount} > 0 and ${t.fee} >= 0`),
     tenantPolicy('payments'),
   ],
@@ -234,9 +332,21 @@ export const refunds = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
-    foreignKey({ name: 'refunds_payment', columns: [t.workspaceId, t.paymentId], foreignColumns: [payments.workspaceId, payments.id] }),
-    foreignKey({ name: 'refunds_invoice', columns: [t.workspaceId, t.invoiceId], foreignColumns: [invoices.workspaceId, invoices.id] }),
-    foreignKey({ name: 'refunds_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'refunds_payment',
+      columns: [t.workspaceId, t.paymentId],
+      foreignColumns: [payments.workspaceId, payments.id],
+    }),
+    foreignKey({
+      name: 'refunds_invoice',
+      columns: [t.workspaceId, t.invoiceId],
+      foreignColumns: [invoices.workspaceId, invoices.id],
+    }),
+    foreignKey({
+      name: 'refunds_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('refunds_positive', sql`${t.amount} > 0`),
     tenantPolicy('refunds'),
   ],

@@ -1,6 +1,28 @@
 import { sql } from 'drizzle-orm';
-import { check, foreignKey, index, integer, jsonb, pgTable, primaryKey, smallint, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
-import type { AnimalId, ClutchId, MemberId, PairingId, PairingVersionId, PartyId, ProjectId, TermsId } from '@/lib/contracts/ids';
+import {
+  check,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  smallint,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
+import type {
+  AnimalId,
+  ClutchId,
+  MemberId,
+  PairingId,
+  PairingVersionId,
+  PartyId,
+  ProjectId,
+  TermsId,
+} from '@/lib/contracts/ids';
 import type { PairingEventKind, PairingFigures, PairingPlan } from '@/lib/contracts/pairing-figures';
 import { animals } from './collection';
 import { createdAt, day, moment, tenantPolicy, versionColumn, workspaceColumn } from './columns';
@@ -17,7 +39,10 @@ export const pairings = pgTable(
     season: integer('season').notNull(),
     sireId: uuid('sire_id').$type<AnimalId>().notNull(),
     damId: uuid('dam_id').$type<AnimalId>().notNull(),
-    status: text('status').$type<'draft' | 'proposed' | 'agreed' | 'withdrawn' | 'ended'>().notNull().default('draft'),
+    status: text('status')
+      .$type<'draft' | 'proposed' | 'agreed' | 'withdrawn' | 'ended'>()
+      .notNull()
+      .default('draft'),
     createdBy: uuid('created_by').$type<MemberId>().notNull(),
     version: versionColumn(),
     createdAt: createdAt(),
@@ -25,11 +50,29 @@ export const pairings = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('pairings_season').on(t.workspaceId, t.season),
-    uniqueIndex('pairings_once').on(t.workspaceId, t.season, t.sireId, t.damId).where(sql`status <> 'withdrawn'`),
-    foreignKey({ name: 'pairings_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
-    foreignKey({ name: 'pairings_sire', columns: [t.workspaceId, t.sireId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'pairings_dam', columns: [t.workspaceId, t.damId], foreignColumns: [animals.workspaceId, animals.id] }),
-    foreignKey({ name: 'pairings_created_by', columns: [t.workspaceId, t.createdBy], foreignColumns: [members.workspaceId, members.id] }),
+    uniqueIndex('pairings_once')
+      .on(t.workspaceId, t.season, t.sireId, t.damId)
+      .where(sql`status <> 'withdrawn'`),
+    foreignKey({
+      name: 'pairings_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
+    foreignKey({
+      name: 'pairings_sire',
+      columns: [t.workspaceId, t.sireId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'pairings_dam',
+      columns: [t.workspaceId, t.damId],
+      foreignColumns: [animals.workspaceId, animals.id],
+    }),
+    foreignKey({
+      name: 'pairings_created_by',
+      columns: [t.workspaceId, t.createdBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('pairings_two_animals', sql`${t.sireId} <> ${t.damId}`),
     tenantPolicy('pairings'),
   ],
@@ -56,9 +99,21 @@ export const pairingVersions = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('pairing_versions_number').on(t.workspaceId, t.pairingId, t.number),
-    foreignKey({ name: 'pairing_versions_pairing', columns: [t.workspaceId, t.pairingId], foreignColumns: [pairings.workspaceId, pairings.id] }),
-    foreignKey({ name: 'pairing_versions_terms', columns: [t.workspaceId, t.termsId], foreignColumns: [termsVersions.workspaceId, termsVersions.id] }),
-    foreignKey({ name: 'pairing_versions_by', columns: [t.workspaceId, t.proposedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'pairing_versions_pairing',
+      columns: [t.workspaceId, t.pairingId],
+      foreignColumns: [pairings.workspaceId, pairings.id],
+    }),
+    foreignKey({
+      name: 'pairing_versions_terms',
+      columns: [t.workspaceId, t.termsId],
+      foreignColumns: [termsVersions.workspaceId, termsVersions.id],
+    }),
+    foreignKey({
+      name: 'pairing_versions_by',
+      columns: [t.workspaceId, t.proposedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('pairing_versions'),
   ],
 );
@@ -78,9 +133,21 @@ export const pairingDecisions = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('pairing_decisions_version').on(t.workspaceId, t.pairingVersionId, t.decidedAt),
-    foreignKey({ name: 'pairing_decisions_version_fk', columns: [t.workspaceId, t.pairingVersionId], foreignColumns: [pairingVersions.workspaceId, pairingVersions.id] }),
-    foreignKey({ name: 'pairing_decisions_party', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'pairing_decisions_by', columns: [t.workspaceId, t.decidedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'pairing_decisions_version_fk',
+      columns: [t.workspaceId, t.pairingVersionId],
+      foreignColumns: [pairingVersions.workspaceId, pairingVersions.id],
+    }),
+    foreignKey({
+      name: 'pairing_decisions_party',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'pairing_decisions_by',
+      columns: [t.workspaceId, t.decidedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('pairing_decisions'),
   ],
 );
@@ -103,8 +170,16 @@ export const pairingEvents = pgTable(
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
     index('pairing_events_pairing').on(t.workspaceId, t.pairingId, t.seenOn),
-    foreignKey({ name: 'pairing_events_pairing_fk', columns: [t.workspaceId, t.pairingId], foreignColumns: [pairings.workspaceId, pairings.id] }),
-    foreignKey({ name: 'pairing_events_by', columns: [t.workspaceId, t.recordedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'pairing_events_pairing_fk',
+      columns: [t.workspaceId, t.pairingId],
+      foreignColumns: [pairings.workspaceId, pairings.id],
+    }),
+    foreignKey({
+      name: 'pairing_events_by',
+      columns: [t.workspaceId, t.recordedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('pairing_events'),
   ],
 );
@@ -135,9 +210,21 @@ export const clutches = pgTable(
     primaryKey({ columns: [t.workspaceId, t.id] }),
     unique('clutches_code').on(t.workspaceId, t.code),
     index('clutches_pairing').on(t.workspaceId, t.pairingId),
-    foreignKey({ name: 'clutches_pairing_fk', columns: [t.workspaceId, t.pairingId], foreignColumns: [pairings.workspaceId, pairings.id] }),
-    foreignKey({ name: 'clutches_project', columns: [t.workspaceId, t.projectId], foreignColumns: [projects.workspaceId, projects.id] }),
-    foreignKey({ name: 'clutches_terms', columns: [t.workspaceId, t.termsId], foreignColumns: [termsVersions.workspaceId, termsVersions.id] }),
+    foreignKey({
+      name: 'clutches_pairing_fk',
+      columns: [t.workspaceId, t.pairingId],
+      foreignColumns: [pairings.workspaceId, pairings.id],
+    }),
+    foreignKey({
+      name: 'clutches_project',
+      columns: [t.workspaceId, t.projectId],
+      foreignColumns: [projects.workspaceId, projects.id],
+    }),
+    foreignKey({
+      name: 'clutches_terms',
+      columns: [t.workspaceId, t.termsId],
+      foreignColumns: [termsVersions.workspaceId, termsVersions.id],
+    }),
     check('clutches_counts', sql`${t.eggs} >= 0 and ${t.slugs} >= 0 and ${t.eggs} + ${t.slugs} > 0`),
     tenantPolicy('clutches'),
   ],

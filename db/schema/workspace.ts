@@ -1,10 +1,33 @@
 import { sql } from 'drizzle-orm';
-import { check, foreignKey, index, integer, jsonb, pgPolicy, pgTable, primaryKey, smallint, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  check,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgPolicy,
+  pgTable,
+  primaryKey,
+  smallint,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import type { InvitationId, MemberId, PartyId, ProjectId, UserId, WorkspaceId } from '@/lib/contracts/ids';
 import type { Role } from '@/lib/contracts/roles';
 import type { WorkspaceLimits } from '@/lib/contracts/workspace';
 import { users } from './auth';
-import { announcedLink, announcedPerson, createdAt, day, moment, tenantPolicy, versionColumn, workspaceColumn } from './columns';
+import {
+  announcedLink,
+  announcedPerson,
+  createdAt,
+  day,
+  moment,
+  tenantPolicy,
+  versionColumn,
+  workspaceColumn,
+} from './columns';
 
 export const workspaces = pgTable(
   'workspaces',
@@ -66,7 +89,10 @@ export const members = pgTable(
   {
     workspaceId: workspaceColumn().references(() => workspaces.id),
     id: uuid('id').$type<MemberId>().notNull().defaultRandom(),
-    userId: text('user_id').$type<UserId>().notNull().references(() => users.id),
+    userId: text('user_id')
+      .$type<UserId>()
+      .notNull()
+      .references(() => users.id),
     role: text('role').$type<Role>().notNull(),
     /** The party this person acts for; owners and partners have one. */
     partyId: uuid('party_id').$type<PartyId>(),
@@ -76,9 +102,15 @@ export const members = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
-    uniqueIndex('members_one_per_person').on(t.workspaceId, t.userId).where(sql`ended_at is null`),
+    uniqueIndex('members_one_per_person')
+      .on(t.workspaceId, t.userId)
+      .where(sql`ended_at is null`),
     index('members_user').on(t.userId),
-    foreignKey({ name: 'members_party', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
+    foreignKey({
+      name: 'members_party',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
     check('members_role', sql`${t.role} in ('owner', 'partner', 'keeper', 'accountant')`),
     tenantPolicy('members', sql`user_id = ${announcedPerson}`),
   ],
@@ -102,8 +134,16 @@ export const invitations = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
-    foreignKey({ name: 'invitations_party', columns: [t.workspaceId, t.partyId], foreignColumns: [parties.workspaceId, parties.id] }),
-    foreignKey({ name: 'invitations_invited_by', columns: [t.workspaceId, t.invitedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'invitations_party',
+      columns: [t.workspaceId, t.partyId],
+      foreignColumns: [parties.workspaceId, parties.id],
+    }),
+    foreignKey({
+      name: 'invitations_invited_by',
+      columns: [t.workspaceId, t.invitedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     tenantPolicy('invitations', sql`token_hash = ${announcedLink}`),
   ],
 );
@@ -123,7 +163,11 @@ export const closedPeriods = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.workspaceId, t.id] }),
-    foreignKey({ name: 'closed_periods_by', columns: [t.workspaceId, t.closedBy], foreignColumns: [members.workspaceId, members.id] }),
+    foreignKey({
+      name: 'closed_periods_by',
+      columns: [t.workspaceId, t.closedBy],
+      foreignColumns: [members.workspaceId, members.id],
+    }),
     check('closed_periods_order', sql`${t.fromDay} <= ${t.throughDay}`),
     tenantPolicy('closed_periods'),
   ],

@@ -19,11 +19,16 @@ export async function pageCaller(): Promise<Caller> {
  * Runs a use case for a page. A visitor is sent to sign in and comes back; what may not be seen looks like what
  * does not exist.
  */
-export async function loadForPage<C extends Contract>(useCase: UseCase<C>, input: Request<C>, from: string): Promise<Answer<C>> {
+async function loadForPage<C extends Contract>(
+  useCase: UseCase<C>,
+  input: Request<C>,
+  from: string,
+): Promise<Answer<C>> {
   try {
     return await perform(useCase, await pageCaller(), input as { params?: unknown; query?: unknown });
   } catch (error) {
-    if (error instanceof Refusal && error.code === 'signed_out') redirect(`/sign-in?next=${encodeURIComponent(from)}`);
+    if (error instanceof Refusal && error.code === 'signed_out')
+      redirect(`/sign-in?next=${encodeURIComponent(from)}`);
     if (error instanceof Refusal && (error.code === 'not_found' || error.code === 'not_allowed')) notFound();
     throw error;
   }
@@ -37,7 +42,15 @@ export function prefetched<C extends Contract>(useCase: UseCase<C>, input: Reque
 }
 
 /** Renders its children with the queries already answered, by the same use cases that the routes call. */
-export async function Prefetch({ queries, from, children }: { queries: Prefetched[]; from: string; children: ReactNode }) {
+export async function Prefetch({
+  queries,
+  from,
+  children,
+}: {
+  queries: Prefetched[];
+  from: string;
+  children: ReactNode;
+}) {
   const client = new QueryClient();
   // One after the other: each takes a connection, and a page needs few.
   for (const { key, load } of queries) client.setQueryData(key, await load(from));

@@ -22,7 +22,7 @@ const kinds: Record<RefusalCode, { status: number; title: string }> = {
 };
 
 /** The problem document (RFC 9457) for anything that was thrown; what is nobody's doing is logged and says little. */
-export function describeProblem(error: unknown): Problem {
+function describeProblem(error: unknown): Problem {
   if (error instanceof Refusal) {
     const { status, title } = kinds[error.code];
     return {
@@ -39,7 +39,8 @@ export function describeProblem(error: unknown): Problem {
     type: '/problems/unexpected',
     title: 'Something went wrong here',
     status: 500,
-    detail: 'This is our fault, not yours. Nothing was saved. Try again; if it stays, tell the owner of the workspace.',
+    detail:
+      'This is our fault, not yours. Nothing was saved. Try again; if it stays, tell the owner of the workspace.',
     errors: [],
   };
 }

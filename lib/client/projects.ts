@@ -5,7 +5,14 @@ import type { z } from 'zod';
 import type { ProjectId, TermsId } from '@/lib/contracts/ids';
 import { createProject, editProject, listProjects, showProject } from '@/lib/contracts/project';
 import { showWorkspace } from '@/lib/contracts/session';
-import { decideTerms, listTerms, previewTerms, proposeTerms, showTerms, withdrawTerms } from '@/lib/contracts/terms';
+import {
+  decideTerms,
+  listTerms,
+  previewTerms,
+  proposeTerms,
+  showTerms,
+  withdrawTerms,
+} from '@/lib/contracts/terms';
 import { optionsOf, useContractMutation } from './queries';
 import { request, type RequestError } from './request';
 import { useWorkspaceSlug } from './workspace';

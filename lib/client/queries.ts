@@ -37,7 +37,9 @@ export function useContractMutation<C extends Contract>(contract: C, refreshes: 
     },
     onSuccess: async () => {
       const ids = new Set(refreshes.map((refreshed) => refreshed.id));
-      await client.invalidateQueries({ predicate: ({ queryKey }: { queryKey: QueryKey }) => ids.has(String(queryKey[0])) });
+      await client.invalidateQueries({
+        predicate: ({ queryKey }: { queryKey: QueryKey }) => ids.has(String(queryKey[0])),
+      });
     },
   });
 }

@@ -17,16 +17,24 @@ const unreachable: Problem = {
   type: '/problems/unreachable',
   title: 'No connection',
   status: 0,
-  detail: 'The server could not be reached. What you entered is still here and has not been saved; try again when you are connected.',
+  detail:
+    'The server could not be reached. What you entered is still here and has not been saved; try again when you are connected.',
   errors: [],
 };
 
 /** The address of a contract for these parameters, also for links to files and pictures. */
 export function addressOf<C extends Contract>(contract: C, input: Request<C>): string {
-  const { params = {}, query = {} } = input as { params?: Record<string, string>; query?: Record<string, unknown> };
-  const path = contract.path.replace(/\{(\w+)\}/g, (_, name: string) => encodeURIComponent(params[name] ?? ''));
+  const { params = {}, query = {} } = input as {
+    params?: Record<string, string>;
+    query?: Record<string, unknown>;
+  };
+  const path = contract.path.replace(/\{(\w+)\}/g, (_, name: string) =>
+    encodeURIComponent(params[name] ?? ''),
+  );
   const search = new URLSearchParams(
-    Object.entries(query).flatMap(([key, value]) => (value === undefined || value === '' ? [] : [[key, String(value)]])),
+    Object.entries(query).flatMap(([key, value]) =>
+      value === undefined || value === '' ? [] : [[key, String(value)]],
+    ),
   ).toString();
   return `/api/v1${path}${search ? `?${search}` : ''}`;
 }
@@ -48,7 +56,12 @@ export async function request<C extends Contract>(
       ...(body !== undefined && !isForm ? { 'content-type': 'application/json' } : {}),
       ...(options.idempotencyKey ? { 'idempotency-key': options.idempotencyKey } : {}),
     },
-    body: body === undefined ? undefined : isForm ? formOf(body as Record<string, unknown>) : JSON.stringify(body),
+    body:
+      body === undefined
+        ? undefined
+        : isForm
+          ? formOf(body as Record<string, unknown>)
+          : JSON.stringify(body),
     signal: options.signal,
   }).catch((error: unknown) => {
     if (error instanceof DOMException && error.name === 'AbortError') throw error;
@@ -57,7 +70,9 @@ export async function request<C extends Contract>(
   const answer: unknown = await response.json().catch(() => null);
   if (response.ok) return answer as Answer<C>;
   const parsed = problem.safeParse(answer);
-  throw new RequestError(parsed.success ? parsed.data : { ...unreachable, title: 'No answer', status: response.status });
+  throw new RequestError(
+    parsed.success ? parsed.data : { ...unreachable, title: 'No answer', status: response.status },
+  );
 }
 
 function formOf(fields: Record<string, unknown>): FormData {

@@ -4,7 +4,15 @@ import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import type { z } from 'zod';
 import { listComments, writeComment, type CommentSubject } from '@/lib/contracts/comment';
 import type { PairingId, ProjectId } from '@/lib/contracts/ids';
-import { decidePairing, listPairings, previewPairing, proposePairing, proposePairingAgain, showPairing, withdrawPairing } from '@/lib/contracts/pairing';
+import {
+  decidePairing,
+  listPairings,
+  previewPairing,
+  proposePairing,
+  proposePairingAgain,
+  showPairing,
+  withdrawPairing,
+} from '@/lib/contracts/pairing';
 import { listProjects, showProject } from '@/lib/contracts/project';
 import { listBreeders, showSeason } from '@/lib/contracts/season';
 import { optionsOf, useContractMutation } from './queries';
@@ -19,17 +27,26 @@ export type SeasonQuery = z.input<typeof showSeason.query>;
 /** A season with its pairings; what was shown before stays in sight while the next is fetched. */
 export function useSeason(query: SeasonQuery) {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(showSeason, { params: { workspace }, query }), placeholderData: keepPreviousData });
+  return useQuery({
+    ...optionsOf(showSeason, { params: { workspace }, query }),
+    placeholderData: keepPreviousData,
+  });
 }
 
 export function usePairing(pairing: PairingId | null) {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(showPairing, { params: { workspace, pairing: pairing ?? '' } }), enabled: pairing !== null });
+  return useQuery({
+    ...optionsOf(showPairing, { params: { workspace, pairing: pairing ?? '' } }),
+    enabled: pairing !== null,
+  });
 }
 
 export function useBreeders(project: ProjectId | null) {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(listBreeders, { params: { workspace }, query: { project: project ?? '' } }), enabled: project !== null });
+  return useQuery({
+    ...optionsOf(listBreeders, { params: { workspace }, query: { project: project ?? '' } }),
+    enabled: project !== null,
+  });
 }
 
 export type PreviewInput = z.input<typeof previewPairing.body>;
@@ -39,7 +56,8 @@ export function usePairingPreview(body: PreviewInput | null) {
   const workspace = useWorkspaceSlug();
   return useQuery<z.output<typeof previewPairing.response>, RequestError>({
     queryKey: [previewPairing.id, workspace, body],
-    queryFn: ({ signal }) => request(previewPairing, { params: { workspace }, body: body as PreviewInput }, { signal }),
+    queryFn: ({ signal }) =>
+      request(previewPairing, { params: { workspace }, body: body as PreviewInput }, { signal }),
     enabled: body !== null,
     placeholderData: keepPreviousData,
     retry: false,
@@ -53,6 +71,9 @@ export const useWithdrawPairing = () => useContractMutation(withdrawPairing, pai
 
 export function useComments(kind: CommentSubject, subject: string) {
   const workspace = useWorkspaceSlug();
-  return useQuery({ ...optionsOf(listComments, { params: { workspace, kind, subject } }), refetchInterval: 30_000 });
+  return useQuery({
+    ...optionsOf(listComments, { params: { workspace, kind, subject } }),
+    refetchInterval: 30_000,
+  });
 }
 export const useWriteComment = () => useContractMutation(writeComment, [listComments]);

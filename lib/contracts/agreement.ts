@@ -16,8 +16,13 @@ export const decision = z.enum(['agreed', 'change_asked']);
 
 /** What a party answers to a version. A change that is asked for says which. */
 export const decisionFields = { decision, comment: z.string().trim().max(2000).default('') };
-export const saysWhichChange = ({ decision: decided, comment }: { decision: z.infer<typeof decision>; comment: string }) =>
-  decided === 'agreed' || comment.length > 0;
+export const saysWhichChange = ({
+  decision: decided,
+  comment,
+}: {
+  decision: z.infer<typeof decision>;
+  comment: string;
+}) => decided === 'agreed' || comment.length > 0;
 export const whichChange = { error: 'Say what should change.', path: ['comment'] };
 
 /** Something that differs from the version before. */

@@ -6,10 +6,28 @@ export type Sex = z.infer<typeof sex>;
 export const animalOrigin = z.enum(['captive_bred', 'wild_caught', 'unknown']);
 export type AnimalOrigin = z.infer<typeof animalOrigin>;
 
-export const animalStatus = z.enum(['here', 'on_loan', 'quarantine', 'sold', 'given_away', 'died', 'missing']);
+export const animalStatus = z.enum([
+  'here',
+  'on_loan',
+  'quarantine',
+  'sold',
+  'given_away',
+  'died',
+  'missing',
+]);
 export type AnimalStatus = z.infer<typeof animalStatus>;
 
-export const ownershipReason = z.enum(['founding', 'buy_in', 'transfer', 'gift', 'buy_out', 'inheritance', 'hatched', 'sale', 'correction']);
+export const ownershipReason = z.enum([
+  'founding',
+  'buy_in',
+  'transfer',
+  'gift',
+  'buy_out',
+  'inheritance',
+  'hatched',
+  'sale',
+  'correction',
+]);
 export type OwnershipReason = z.infer<typeof ownershipReason>;
 
 /**

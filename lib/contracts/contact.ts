@@ -48,7 +48,13 @@ const fields = {
   followUpNote: z.string().trim().max(300).default(''),
 };
 
-export const contactEvent = z.object({ id: z.uuid(), kind: contactEventKind, body: z.string(), happenedAt: instant, by: z.string().nullable() });
+export const contactEvent = z.object({
+  id: z.uuid(),
+  kind: contactEventKind,
+  body: z.string(),
+  happenedAt: instant,
+  by: z.string().nullable(),
+});
 
 export const contactDetail = z.object({
   ...fields,
@@ -56,9 +62,24 @@ export const contactDetail = z.object({
   version: z.int(),
   events: z.array(contactEvent),
   invoices: z.array(
-    z.object({ id: invoiceId, number: z.string().nullable(), status: invoiceStatus, total: minorUnits, paid: minorUnits, issuedOn: isoDay.nullable() }),
+    z.object({
+      id: invoiceId,
+      number: z.string().nullable(),
+      status: invoiceStatus,
+      total: minorUnits,
+      paid: minorUnits,
+      issuedOn: isoDay.nullable(),
+    }),
   ),
-  animals: z.array(z.object({ id: animalId, code: z.string(), description: z.string(), price: minorUnits, deliveredOn: isoDay.nullable() })),
+  animals: z.array(
+    z.object({
+      id: animalId,
+      code: z.string(),
+      description: z.string(),
+      price: minorUnits,
+      deliveredOn: isoDay.nullable(),
+    }),
+  ),
   documents: z.array(z.object({ id: documentId, name: z.string(), contentType: z.string(), bytes: z.int() })),
 });
 export type ContactDetail = z.infer<typeof contactDetail>;

@@ -17,7 +17,9 @@ export interface FileAnswer {
   /** Seconds that the person's own browser may keep it. */
   keepSeconds?: number;
 }
-export const fileAnswer = z.custom<FileAnswer>((value) => typeof value === 'object' && value !== null && 'contentType' in value);
+export const fileAnswer = z.custom<FileAnswer>(
+  (value) => typeof value === 'object' && value !== null && 'contentType' in value,
+);
 
 export interface Contract<
   Params extends z.ZodType = z.ZodType,
@@ -44,7 +46,11 @@ export interface Contract<
   produces: string | null;
 }
 
-export type Input<C extends Contract> = { params: z.output<C['params']>; query: z.output<C['query']>; body: z.output<C['body']> };
+export type Input<C extends Contract> = {
+  params: z.output<C['params']>;
+  query: z.output<C['query']>;
+  body: z.output<C['body']>;
+};
 export type Answer<C extends Contract> = z.output<C['response']>;
 
 type Nothing = Record<never, never>;
@@ -96,10 +102,14 @@ export function contract<
 }
 
 /** A page of a list: how many rows to skip and to give. */
-export const pageQuery = { offset: z.coerce.number().int().min(0).default(0), limit: z.coerce.number().int().min(1).max(500).default(100) };
+export const pageQuery = {
+  offset: z.coerce.number().int().min(0).default(0),
+  limit: z.coerce.number().int().min(1).max(500).default(100),
+};
 
 /** A list with the count of all rows that match. */
-export const pageOf = <Row extends z.ZodType>(row: Row) => z.object({ rows: z.array(row), total: z.int().min(0) });
+export const pageOf = <Row extends z.ZodType>(row: Row) =>
+  z.object({ rows: z.array(row), total: z.int().min(0) });
 
 export const isoDay = z.iso.date();
 /** An instant as ISO 8601 text on the wire. */

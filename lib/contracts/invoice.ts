@@ -28,7 +28,12 @@ export const listListings = contract({
   path: '/workspaces/{workspace}/listings',
   summary: 'Animals that are or could be for sale: hatchlings, and what was ever priced',
   access: { scope: 'workspace', action: 'listing.see' },
-  query: z.object({ ...pageQuery, search: z.string().trim().max(80).optional(), state: listingState.optional(), project: projectId.optional() }),
+  query: z.object({
+    ...pageQuery,
+    search: z.string().trim().max(80).optional(),
+    state: listingState.optional(),
+    project: projectId.optional(),
+  }),
   response: pageOf(listingRow),
 });
 
@@ -49,8 +54,14 @@ export const priceAnimal = contract({
       /** 0 when the animal was never priced. */
       version: z.int().min(0),
     })
-    .refine(({ state, price }) => state !== 'listed' || price !== null, { error: 'Give the price it is offered at.', path: ['price'] })
-    .refine(({ state, heldFor }) => state !== 'held' || heldFor !== null, { error: 'Say whom it is held for.', path: ['heldFor'] }),
+    .refine(({ state, price }) => state !== 'listed' || price !== null, {
+      error: 'Give the price it is offered at.',
+      path: ['price'],
+    })
+    .refine(({ state, heldFor }) => state !== 'held' || heldFor !== null, {
+      error: 'Say whom it is held for.',
+      path: ['heldFor'],
+    }),
   response: listingRow,
 });
 
@@ -83,7 +94,12 @@ export const listInvoices = contract({
   path: '/workspaces/{workspace}/invoices',
   summary: 'Invoices, newest first',
   access: { scope: 'workspace', action: 'invoice.see' },
-  query: z.object({ ...pageQuery, search: z.string().trim().max(80).optional(), status: invoiceStatus.optional(), overdue: z.enum(['yes']).optional() }),
+  query: z.object({
+    ...pageQuery,
+    search: z.string().trim().max(80).optional(),
+    status: invoiceStatus.optional(),
+    overdue: z.enum(['yes']).optional(),
+  }),
   response: pageOf(invoiceRow),
 });
 
@@ -110,7 +126,16 @@ export const invoiceDetail = invoiceRow.extend({
   lines: z.array(invoiceLine),
   instalments: z.array(instalment),
   payments: z.array(paymentRow),
-  refunds: z.array(z.object({ id: refundId, paymentId, amount: minorUnits, reason: z.string(), status: z.enum(['pending', 'succeeded', 'failed']), refundedOn: isoDay })),
+  refunds: z.array(
+    z.object({
+      id: refundId,
+      paymentId,
+      amount: minorUnits,
+      reason: z.string(),
+      status: z.enum(['pending', 'succeeded', 'failed']),
+      refundedOn: isoDay,
+    }),
+  ),
   buyerEmail: z.string().nullable(),
 });
 export type InvoiceDetail = z.infer<typeof invoiceDetail>;
@@ -141,7 +166,10 @@ export const invoiceDraft = z
     balanceDueOn: isoDay,
     note: z.string().trim().max(2000).default(''),
   })
-  .refine(({ deposit, depositDueOn }) => deposit === 0 || depositDueOn !== null, { error: 'Say when the deposit is due.', path: ['depositDueOn'] })
+  .refine(({ deposit, depositDueOn }) => deposit === 0 || depositDueOn !== null, {
+    error: 'Say when the deposit is due.',
+    path: ['depositDueOn'],
+  })
   .refine(({ depositDueOn, balanceDueOn }) => depositDueOn === null || depositDueOn <= balanceDueOn, {
     error: 'The balance is due on or after the day of the deposit.',
     path: ['balanceDueOn'],
@@ -169,4 +197,3 @@ export const voidInvoice = contract({
   body: z.object({ version: z.int(), reason: z.string().trim().min(1, 'Give the reason.').max(500) }),
   response: z.object({ version: z.int() }),
 });
-

@@ -7,5 +7,15 @@ export type AccountType = z.infer<typeof accountType>;
 export const accountPurpose = z.string().min(1).max(60);
 export type AccountPurpose = z.infer<typeof accountPurpose>;
 
-export const entryCauseKind = z.enum(['payment', 'refund', 'expense', 'delivery', 'settlement', 'transfer', 'dispute', 'correction', 'payout']);
+export const entryCauseKind = z.enum([
+  'payment',
+  'refund',
+  'expense',
+  'delivery',
+  'settlement',
+  'transfer',
+  'dispute',
+  'correction',
+  'payout',
+]);
 export type EntryCauseKind = z.infer<typeof entryCauseKind>;

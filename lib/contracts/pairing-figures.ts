@@ -1,7 +1,15 @@
 import { z } from 'zod';
 import { animalId, locusId, partyId, termsId } from './ids';
 
-export const pairingEventKind = z.enum(['introduction', 'separation', 'lock', 'refusal', 'follicles', 'ovulation', 'pre_lay_shed']);
+export const pairingEventKind = z.enum([
+  'introduction',
+  'separation',
+  'lock',
+  'refusal',
+  'follicles',
+  'ovulation',
+  'pre_lay_shed',
+]);
 export type PairingEventKind = z.infer<typeof pairingEventKind>;
 
 /** What is proposed of a pairing beside its two animals. */
@@ -99,7 +107,9 @@ export const pairingFigures = z.object({
     currency: z.string(),
     /** Taken off before the shares, such as the house share. Steps and shares add up to what is expected. */
     steps: z.array(z.object({ label: z.string(), amount: z.int(), partyId: partyId.nullable() })),
-    shares: z.array(z.object({ partyId, name: z.string(), amount: z.int(), parts: z.int(), of: z.int(), why: z.string() })),
+    shares: z.array(
+      z.object({ partyId, name: z.string(), amount: z.int(), parts: z.int(), of: z.int(), why: z.string() }),
+    ),
   }),
 });
 export type PairingFigures = z.infer<typeof pairingFigures>;

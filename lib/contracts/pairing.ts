@@ -59,7 +59,11 @@ export const previewPairing = contract({
 });
 export type PairingPreview = z.infer<typeof previewPairing.response>;
 
-const proposal = { ...planFields, acknowledgedCautions: z.array(z.string()).default([]), answerBy: isoDay.nullable().default(null) };
+const proposal = {
+  ...planFields,
+  acknowledgedCautions: z.array(z.string()).default([]),
+  answerBy: isoDay.nullable().default(null),
+};
 
 export const proposePairing = contract({
   id: 'pairings.propose',
@@ -76,7 +80,8 @@ export const proposePairingAgain = contract({
   id: 'pairings.propose-again',
   method: 'POST',
   path: '/workspaces/{workspace}/pairings/{pairing}/versions',
-  summary: 'Propose a new version of a pairing that is not agreed yet; what was answered to the version before no longer counts',
+  summary:
+    'Propose a new version of a pairing that is not agreed yet; what was answered to the version before no longer counts',
   access: { scope: 'workspace', action: 'pairing.propose' },
   params: inPairing,
   body: z
@@ -149,7 +154,14 @@ export const pairingRow = z.object({
   hatching: dayWindow.nullable(),
   forecastFrom: z.string(),
   clutches: z.array(
-    z.object({ id: clutchId, code: z.string(), laidOn: isoDay, hatchedOn: isoDay.nullable(), eggs: z.int(), slugs: z.int() }),
+    z.object({
+      id: clutchId,
+      code: z.string(),
+      laidOn: isoDay,
+      hatchedOn: isoDay.nullable(),
+      eggs: z.int(),
+      slugs: z.int(),
+    }),
   ),
   /** Absent for who may not see worth. */
   proceeds: z
@@ -202,7 +214,8 @@ export const showPairing = contract({
   id: 'pairings.show',
   method: 'GET',
   path: '/workspaces/{workspace}/pairings/{pairing}',
-  summary: 'A pairing with every version that was proposed, who stands where, what was seen and what was laid',
+  summary:
+    'A pairing with every version that was proposed, who stands where, what was seen and what was laid',
   access: { scope: 'workspace', action: 'pairing.see' },
   params: inPairing,
   response: pairingRow.extend({

@@ -7,5 +7,7 @@ export function queryKeyOf<C extends Contract>(contract: C, input: Request<C>): 
 }
 
 function dropEmpty(values: object): object {
-  return Object.fromEntries(Object.entries(values).filter(([, value]) => value !== undefined && value !== ''));
+  return Object.fromEntries(
+    Object.entries(values).filter(([, value]) => value !== undefined && value !== ''),
+  );
 }

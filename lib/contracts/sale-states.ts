@@ -9,7 +9,16 @@ export type InvoiceStatus = z.infer<typeof invoiceStatus>;
 export const paymentMethod = z.enum(['card', 'bank_transfer', 'cash']);
 export type PaymentMethod = z.infer<typeof paymentMethod>;
 
-export const contactEventKind = z.enum(['inquiry', 'mail', 'call', 'meeting', 'note', 'invoice', 'payment', 'delivery']);
+export const contactEventKind = z.enum([
+  'inquiry',
+  'mail',
+  'call',
+  'meeting',
+  'note',
+  'invoice',
+  'payment',
+  'delivery',
+]);
 export type ContactEventKind = z.infer<typeof contactEventKind>;
 
 export const contactAddress = z.object({

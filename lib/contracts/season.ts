@@ -7,7 +7,8 @@ export const showSeason = contract({
   id: 'season.show',
   method: 'GET',
   path: '/workspaces/{workspace}/season',
-  summary: 'A season: its pairings in time, how many are agreed, what is expected to hatch and what it would be worth',
+  summary:
+    'A season: its pairings in time, how many are agreed, what is expected to hatch and what it would be worth',
   access: { scope: 'workspace', action: 'pairing.see' },
   query: z.object(pairingQuery),
   response: z.object({
@@ -46,7 +47,8 @@ export const listBreeders = contract({
   id: 'season.breeders',
   method: 'GET',
   path: '/workspaces/{workspace}/season/breeders',
-  summary: 'The animals that could be paired in a project: those of its species that the caller sees and that are here',
+  summary:
+    'The animals that could be paired in a project: those of its species that the caller sees and that are here',
   access: { scope: 'workspace', action: 'pairing.see' },
   query: z.object({ project: projectId }),
   response: z.object({ sires: z.array(breeder), dams: z.array(breeder) }),

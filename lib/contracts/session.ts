@@ -16,13 +16,19 @@ export const showMe = contract({
 });
 
 /** A party as it is drawn everywhere: its name and its mark (colour and pattern). */
-export const partyMark = z.object({ id: partyId, name: z.string(), kind: z.enum(['partner', 'house']), mark: z.int().min(0).max(7) });
+export const partyMark = z.object({
+  id: partyId,
+  name: z.string(),
+  kind: z.enum(['partner', 'house']),
+  mark: z.int().min(0).max(7),
+});
 
 export const showWorkspace = contract({
   id: 'workspace.show',
   method: 'GET',
   path: '/workspaces/{workspace}',
-  summary: 'The workspace as the caller sees it: who they are in it, what they may do, and what its screens need everywhere',
+  summary:
+    'The workspace as the caller sees it: who they are in it, what they may do, and what its screens need everywhere',
   access: { scope: 'workspace', action: 'workspace.see' },
   response: z.object({
     id: workspaceId,
@@ -37,7 +43,9 @@ export const showWorkspace = contract({
     /** What the caller may do at all; screens and actions that are not among them are not shown. */
     actions: z.array(action),
     parties: z.array(partyMark),
-    projects: z.array(z.object({ id: projectId, name: z.string(), parties: z.array(z.object({ partyId, rank: z.int() })) })),
+    projects: z.array(
+      z.object({ id: projectId, name: z.string(), parties: z.array(z.object({ partyId, rank: z.int() })) }),
+    ),
     workspaces: z.array(workspaceOfPerson),
     unread: z.int(),
   }),

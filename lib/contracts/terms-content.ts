@@ -11,7 +11,9 @@ export const termsContent = z.object({
   damSide: z.int('Whole parts.').min(0).max(1000),
   sireSide: z.int('Whole parts.').min(0).max(1000),
   /** Taken off the top of every sale for the building, before anything is divided. */
-  houseShare: z.object({ partyId, basisPoints: z.int('At most two decimals of a percent.').min(1).max(9_999) }).nullable(),
+  houseShare: z
+    .object({ partyId, basisPoints: z.int('At most two decimals of a percent.').min(1).max(9_999) })
+    .nullable(),
   /** Recorded costs of the clutch go back to who paid them before anything is divided. */
   costsFirst: z.boolean(),
   /** Who bears the fee of a card payment: all, off the top, or the house out of its share. */
@@ -25,6 +27,12 @@ export type TermsContent = z.infer<typeof termsContent>;
 /** What a person writes: the parties follow from the project. */
 export const termsDraft = termsContent
   .omit({ parties: true })
-  .refine(({ damSide, sireSide }) => damSide + sireSide > 0, { error: 'At least one side gets a part.', path: ['damSide'] })
-  .refine(({ cardFees, houseShare }) => cardFees !== 'house' || houseShare !== null, { error: 'There is no house share that could bear the fees.', path: ['cardFees'] });
+  .refine(({ damSide, sireSide }) => damSide + sireSide > 0, {
+    error: 'At least one side gets a part.',
+    path: ['damSide'],
+  })
+  .refine(({ cardFees, houseShare }) => cardFees !== 'house' || houseShare !== null, {
+    error: 'There is no house share that could bear the fees.',
+    path: ['cardFees'],
+  });
 export type TermsDraft = z.infer<typeof termsDraft>;

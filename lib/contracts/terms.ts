@@ -8,7 +8,12 @@ import { termsContent, termsDraft } from './terms-content';
 export const inTerms = inProject.extend({ terms: termsId });
 
 /** One clause in words, with what it was before when it differs; `before` is null in a first version. */
-export const clauseLine = z.object({ title: z.string(), text: z.string(), before: z.string().nullable(), changed: z.boolean() });
+export const clauseLine = z.object({
+  title: z.string(),
+  text: z.string(),
+  before: z.string().nullable(),
+  changed: z.boolean(),
+});
 export type ClauseLine = z.infer<typeof clauseLine>;
 
 const termsRow = z.object({
@@ -58,7 +63,12 @@ export const showTerms = contract({
 });
 export type TermsDetail = z.infer<typeof showTerms.response>;
 
-const splitCut = z.object({ label: z.string(), amount: minorUnits, partyId: partyId.nullable(), note: z.string() });
+const splitCut = z.object({
+  label: z.string(),
+  amount: minorUnits,
+  partyId: partyId.nullable(),
+  note: z.string(),
+});
 export const splitStep = z.object({ label: z.string(), amount: minorUnits, cuts: z.array(splitCut) });
 
 export const previewTerms = contract({

@@ -27,7 +27,10 @@ export interface Allocation<Key extends string = string> {
  * @param weights 0 or more, at least one above 0
  * @throws {MoneyError} when a weight is negative or all are 0
  */
-export function allocateExact(amount: bigint, weights: readonly bigint[]): { amount: bigint; tookOddUnit: boolean }[] {
+export function allocateExact(
+  amount: bigint,
+  weights: readonly bigint[],
+): { amount: bigint; tookOddUnit: boolean }[] {
   if (weights.some((weight) => weight < 0n)) throw new MoneyError('A weight is negative.');
   const total = weights.reduce((sum, weight) => sum + weight, 0n);
   if (total === 0n) throw new MoneyError('Nobody holds a part, so nothing can be split.');
@@ -44,7 +47,10 @@ export function allocateExact(amount: bigint, weights: readonly bigint[]): { amo
       return first > second ? -1 : first < second ? 1 : a - b;
     });
   const odd = new Set(order.slice(0, left));
-  return floors.map((floor, index) => ({ amount: floor + (odd.has(index) ? 1n : 0n), tookOddUnit: odd.has(index) }));
+  return floors.map((floor, index) => ({
+    amount: floor + (odd.has(index) ? 1n : 0n),
+    tookOddUnit: odd.has(index),
+  }));
 }
 
 /**
@@ -54,12 +60,19 @@ export function allocateExact(amount: bigint, weights: readonly bigint[]): { amo
  * @returns one allocation per holder, in the order given
  * @throws {MoneyError} when nobody holds a part, a rank is used twice, or a number is not a safe integer
  */
-export function allocate<Key extends string>(amount: MinorUnits, holders: readonly Holder<Key>[]): Allocation<Key>[] {
+export function allocate<Key extends string>(
+  amount: MinorUnits,
+  holders: readonly Holder<Key>[],
+): Allocation<Key>[] {
   assertMinorUnits(amount);
   for (const { parts } of holders) assertMinorUnits(parts);
-  if (new Set(holders.map(({ rank }) => rank)).size !== holders.length) throw new MoneyError('Two holders have the same rank.');
+  if (new Set(holders.map(({ rank }) => rank)).size !== holders.length)
+    throw new MoneyError('Two holders have the same rank.');
   const byRank = [...holders].sort((a, b) => a.rank - b.rank);
-  const shares = allocateExact(BigInt(amount), byRank.map(({ parts }) => BigInt(parts)));
+  const shares = allocateExact(
+    BigInt(amount),
+    byRank.map(({ parts }) => BigInt(parts)),
+  );
   const of = holders.reduce((sum, { parts }) => sum + parts, 0);
   return holders.map(({ key, parts }) => {
     const share = shares[byRank.findIndex((holder) => holder.key === key)];
@@ -74,7 +87,14 @@ export function allocate<Key extends string>(amount: MinorUnits, holders: readon
  * @param before the total so far
  * @param step what comes now; negative for a refund
  */
-export function allocateStep<Key extends string>(before: MinorUnits, step: MinorUnits, holders: readonly Holder<Key>[]): Allocation<Key>[] {
+export function allocateStep<Key extends string>(
+  before: MinorUnits,
+  step: MinorUnits,
+  holders: readonly Holder<Key>[],
+): Allocation<Key>[] {
   const earlier = allocate(before, holders);
-  return allocate(before + step, holders).map((after, index) => ({ ...after, amount: after.amount - (earlier[index]?.amount ?? 0) }));
+  return allocate(before + step, holders).map((after, index) => ({
+    ...after,
+    amount: after.amount - (earlier[index]?.amount ?? 0),
+  }));
 }

@@ -10,8 +10,29 @@ export class MoneyError extends Error {
 
 /** Decimals of the minor unit where they are not 2 (ISO 4217, list of active codes). */
 const exponents: Readonly<Record<string, 0 | 3>> = {
-  BIF: 0, CLP: 0, DJF: 0, GNF: 0, ISK: 0, JPY: 0, KMF: 0, KRW: 0, PYG: 0, RWF: 0, UGX: 0, VND: 0, VUV: 0, XAF: 0, XOF: 0, XPF: 0,
-  BHD: 3, IQD: 3, JOD: 3, KWD: 3, LYD: 3, OMR: 3, TND: 3,
+  BIF: 0,
+  CLP: 0,
+  DJF: 0,
+  GNF: 0,
+  ISK: 0,
+  JPY: 0,
+  KMF: 0,
+  KRW: 0,
+  PYG: 0,
+  RWF: 0,
+  UGX: 0,
+  VND: 0,
+  VUV: 0,
+  XAF: 0,
+  XOF: 0,
+  XPF: 0,
+  BHD: 3,
+  IQD: 3,
+  JOD: 3,
+  KWD: 3,
+  LYD: 3,
+  OMR: 3,
+  TND: 3,
 };
 
 /** Decimals of a currency's minor unit by ISO 4217: 0, 2 or 3. */
@@ -22,7 +43,8 @@ export function exponentOf(currency: string): 0 | 2 | 3 {
 
 /** @throws {MoneyError} when the amount is not an integer in JavaScript's safe range */
 export function assertMinorUnits(amount: number): MinorUnits {
-  if (!Number.isSafeInteger(amount)) throw new MoneyError(`${amount} is not a whole number of minor units in the safe range.`);
+  if (!Number.isSafeInteger(amount))
+    throw new MoneyError(`${amount} is not a whole number of minor units in the safe range.`);
   return amount;
 }
 
@@ -51,7 +73,12 @@ export function toDecimal(amount: MinorUnits, currency: string): string {
 
 /** For people: the currency's sign, grouped digits, a true minus sign. */
 export function formatMoney(amount: MinorUnits, currency: string, locale = 'en-US'): string {
-  const format = new Intl.NumberFormat(locale, { style: 'currency', currency, minimumFractionDigits: exponentOf(currency), maximumFractionDigits: exponentOf(currency) });
+  const format = new Intl.NumberFormat(locale, {
+    style: 'currency',
+    currency,
+    minimumFractionDigits: exponentOf(currency),
+    maximumFractionDigits: exponentOf(currency),
+  });
   // Decimal text, not a float: ECMA-402 formats numeric strings exactly.
   return format.format(toDecimal(amount, currency) as unknown as number).replace('-', '\u2212');
 }
@@ -62,7 +89,8 @@ export function formatMoney(amount: MinorUnits, currency: string, locale = 'en-U
  */
 export function shareOfBasisPoints(amount: MinorUnits, basisPoints: number): MinorUnits {
   assertMinorUnits(amount);
-  if (!Number.isSafeInteger(basisPoints) || basisPoints < 0) throw new MoneyError('A rate is a whole number of basis points, 0 or more.');
+  if (!Number.isSafeInteger(basisPoints) || basisPoints < 0)
+    throw new MoneyError('A rate is a whole number of basis points, 0 or more.');
   const product = BigInt(Math.abs(amount)) * BigInt(basisPoints);
   const rounded = Number((product + 5000n) / 10_000n);
   return amount < 0 && rounded !== 0 ? -rounded : rounded;

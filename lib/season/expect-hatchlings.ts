@@ -18,7 +18,11 @@ const Z90 = 1.2815515655446004;
  * not by itself (binomial), the number of eggs varies as given, clutches are independent; the sum is taken as normal,
  * and the range is cut to what is possible.
  */
-export function expectHatchlings(clutches: readonly ExpectedClutch[]): { expected: number; from: number; to: number } {
+export function expectHatchlings(clutches: readonly ExpectedClutch[]): {
+  expected: number;
+  from: number;
+  to: number;
+} {
   let expected = 0;
   let variance = 0;
   let least = 0;

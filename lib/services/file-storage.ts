@@ -40,6 +40,7 @@ function folderStorage(folder: string): FileStorage {
 /** The storage that the configuration names. */
 export function openStorage(): FileStorage {
   const { storage } = configuration();
-  if (storage.kind === 'folder') return folderStorage(path.resolve(/* turbopackIgnore: true */ process.cwd(), storage.folder));
+  if (storage.kind === 'folder')
+    return folderStorage(path.resolve(/* turbopackIgnore: true */ process.cwd(), storage.folder));
   throw new Error('S3 storage is not connected yet.');
 }

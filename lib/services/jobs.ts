@@ -4,12 +4,12 @@ import { configuration } from './configuration';
 import { log } from './log';
 
 /** Work that is done outside of a request, with what it needs to know. */
-export interface JobData {
+interface JobData {
   'mail.send': { mailId: string; workspaceId: string | null };
   /** Puts mail whose job was lost (a crash between commit and hand-over) back in line. */
   'mail.sweep': Record<string, never>;
 }
-export type JobName = keyof JobData;
+type JobName = keyof JobData;
 
 export interface JobQueue {
   send<Name extends JobName>(name: Name, data: JobData[Name]): Promise<void>;
@@ -28,7 +28,8 @@ function openQueue(): Promise<PgBoss> {
     const boss = new PgBoss({ connectionString: configuration().database.url, migrate: false, max: 3 });
     boss.on('error', (error) => log.error({ error }, 'job queue'));
     await boss.start();
-    for (const name of names) if (!(await boss.getQueue(name))) await boss.createQueue(name, { name, ...retry });
+    for (const name of names)
+      if (!(await boss.getQueue(name))) await boss.createQueue(name, { name, ...retry });
     return boss;
   })();
   return kept.moietyJobs;

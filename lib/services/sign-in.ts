@@ -10,7 +10,11 @@ import type { MailData, MailTemplate } from './mail/mail-data';
 import { configuration } from './configuration';
 
 /** Sends a mail of the sign-in; given by the module that starts the server, because it needs the mail queue. */
-type SendMail = <Template extends MailTemplate>(template: Template, to: string, data: MailData[Template]) => Promise<void>;
+type SendMail = <Template extends MailTemplate>(
+  template: Template,
+  to: string,
+  data: MailData[Template],
+) => Promise<void>;
 
 const kept = globalThis as { moietySignIn?: ReturnType<typeof build>; moietySignInMail?: SendMail };
 
@@ -34,7 +38,14 @@ function build() {
     telemetry: { enabled: false },
     database: drizzleAdapter(connectDatabase(), {
       provider: 'pg',
-      schema: { user: users, session: sessions, account: credentials, verification: verifications, twoFactor: twoFactors, rateLimit: rateLimits },
+      schema: {
+        user: users,
+        session: sessions,
+        account: credentials,
+        verification: verifications,
+        twoFactor: twoFactors,
+        rateLimit: rateLimits,
+      },
     }),
     rateLimit: { enabled: auth.hasRateLimit, storage: 'database', window: 60, max: 60 },
     session: { expiresIn: 60 * 60 * 24 * 30, updateAge: 60 * 60 * 24 },
@@ -45,13 +56,15 @@ function build() {
       minPasswordLength: 10,
       maxPasswordLength: 128,
       revokeSessionsOnPasswordReset: true,
-      sendResetPassword: ({ user, url }) => sendMail('reset-password', user.email, { name: user.name, link: url }),
+      sendResetPassword: ({ user, url }) =>
+        sendMail('reset-password', user.email, { name: user.name, link: url }),
     },
     emailVerification: {
       sendOnSignUp: true,
       sendOnSignIn: true,
       autoSignInAfterVerification: true,
-      sendVerificationEmail: ({ user, url }) => sendMail('verify-address', user.email, { name: user.name, link: url }),
+      sendVerificationEmail: ({ user, url }) =>
+        sendMail('verify-address', user.email, { name: user.name, link: url }),
     },
     plugins: [
       magicLink({

@@ -37,5 +37,10 @@ export async function recordAudit({ tx, now, workspace, actor }: Doer, line: Aud
     detail: line.detail ?? {},
     reason: line.reason ?? '',
   };
-  await appendAudit(tx, { workspaceId: workspace.id, ...content, previousHash, hash: chainHash(previousHash, content) });
+  await appendAudit(tx, {
+    workspaceId: workspace.id,
+    ...content,
+    previousHash,
+    hash: chainHash(previousHash, content),
+  });
 }

@@ -3,7 +3,8 @@
  * (the idea of RFC 8785; numbers here are integers or short decimals, which JavaScript writes one way only).
  */
 export function canonicalJson(value: unknown): string {
-  if (Array.isArray(value)) return `[${value.map((item) => canonicalJson(item === undefined ? null : item)).join(',')}]`;
+  if (Array.isArray(value))
+    return `[${value.map((item) => canonicalJson(item === undefined ? null : item)).join(',')}]`;
   if (value !== null && typeof value === 'object') {
     const entries = Object.entries(value as Record<string, unknown>)
       .filter(([, item]) => item !== undefined)

@@ -43,12 +43,18 @@ export function translateDatabaseError(error: unknown): unknown {
       return new Refusal('already_exists', 'This is already there.');
     }
     case '23P01':
-      return new Refusal('wrong_state', 'Somebody recorded a change of owners for the same days at the same time. Look at the parts as they are now and try again.');
+      return new Refusal(
+        'wrong_state',
+        'Somebody recorded a change of owners for the same days at the same time. Look at the parts as they are now and try again.',
+      );
     case 'MO001':
     case 'MO002':
       return new Refusal('wrong_state', 'This is locked and can no longer be changed.');
     case 'MO004':
-      return new Refusal('period_closed', 'The accountant has closed the period of this day. Use a later day, or ask for the period to be reopened.');
+      return new Refusal(
+        'period_closed',
+        'The accountant has closed the period of this day. Use a later day, or ask for the period to be reopened.',
+      );
     case 'MO005':
       return new Refusal('wrong_state', 'The currency is fixed once the ledger has entries.');
     case '40001':

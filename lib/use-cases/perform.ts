@@ -33,7 +33,11 @@ export interface RawInput {
  * so that a stranger learns nothing, not even that a field was wrong.
  * @throws {Refusal} for everything that a person can cause
  */
-export async function perform<C extends Contract>(useCase: UseCase<C>, caller: Caller, raw: RawInput): Promise<Answer<C>> {
+export async function perform<C extends Contract>(
+  useCase: UseCase<C>,
+  caller: Caller,
+  raw: RawInput,
+): Promise<Answer<C>> {
   const now = readClock();
   const services = openServices();
   const { contract } = useCase;
@@ -124,8 +128,14 @@ async function once<C extends Contract>(
   input: Input<C>,
   work: () => Promise<Answer<C>>,
 ): Promise<Answer<C>> {
-  if (!key) throw new Refusal('key_missing', 'This request needs an Idempotency-Key header, made new for each intention.');
-  const inputHash = createHash('sha256').update(JSON.stringify([contract.id, input])).digest('hex');
+  if (!key)
+    throw new Refusal(
+      'key_missing',
+      'This request needs an Idempotency-Key header, made new for each intention.',
+    );
+  const inputHash = createHash('sha256')
+    .update(JSON.stringify([contract.id, input]))
+    .digest('hex');
   const isFirst = await reserveKey(tx, { workspaceId: workspace.id, key, useCase: contract.id, inputHash });
   if (!isFirst) {
     const kept = await findAnswer(tx, key);

@@ -8,7 +8,7 @@ import type { Role } from '@/lib/contracts/roles';
 export type Reach = 'all' | 'own' | 'no';
 
 // prettier-ignore
-export const permissions: Record<Action, Record<Role, Reach>> = {
+const permissions: Record<Action, Record<Role, Reach>> = {
   //                        owner            partner           keeper           accountant
   'workspace.see':        { owner: 'all', partner: 'all', keeper: 'all', accountant: 'all' },
   'workspace.configure':  { owner: 'all', partner: 'no', keeper: 'no', accountant: 'no' },

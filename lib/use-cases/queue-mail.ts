@@ -10,7 +10,13 @@ import { afterCommit } from './after-commit';
 /** Asks for a mail: kept with the transaction, sent by a job after its commit, tried again until it is out. */
 export async function queueMail<Template extends MailTemplate>(
   { tx, services }: { tx: Transaction; services: { jobs: JobQueue } },
-  mail: { workspaceId: WorkspaceId | null; template: Template; to: string; data: MailData[Template]; contactId?: ContactId },
+  mail: {
+    workspaceId: WorkspaceId | null;
+    template: Template;
+    to: string;
+    data: MailData[Template];
+    contactId?: ContactId;
+  },
 ): Promise<void> {
   const mailId = await insertMail(tx, {
     workspaceId: mail.workspaceId,

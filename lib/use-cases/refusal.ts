@@ -34,12 +34,18 @@ export class Refusal extends Error {
   }
 }
 
-export const notFound = (what: string) => new Refusal('not_found', `There is no such ${what} here, or you may not see it.`);
+export const notFound = (what: string) =>
+  new Refusal('not_found', `There is no such ${what} here, or you may not see it.`);
 
-export const invalid = (field: string, message: string) => new Refusal('invalid', message, { errors: [{ field, message }] });
+export const invalid = (field: string, message: string) =>
+  new Refusal('invalid', message, { errors: [{ field, message }] });
 
 /** An edit was made on version `seen`, but somebody saved `current` in the meantime. */
 export const stale = (what: string, current: number) =>
-  new Refusal('stale', `Somebody changed this ${what} while you were editing. Nothing of yours was saved; look at the new version and try again.`, {
-    currentVersion: current,
-  });
+  new Refusal(
+    'stale',
+    `Somebody changed this ${what} while you were editing. Nothing of yours was saved; look at the new version and try again.`,
+    {
+      currentVersion: current,
+    },
+  );

@@ -15,7 +15,7 @@ export interface Person {
 }
 
 /** A member at work in a workspace. */
-export interface Member {
+interface Member {
   memberId: MemberId;
   userId: UserId;
   name: string;
@@ -46,7 +46,7 @@ export interface PersonWorld extends Base {
 }
 
 /** A caller who need not be signed in; `person` is who it is if so. */
-export interface VisitorWorld extends Base {
+interface VisitorWorld extends Base {
   person: Person | null;
 }
 

@@ -108,7 +108,7 @@ const at = (animals: readonly Simulated[], index: number): Simulated => {
 };
 
 /** Days from the day of seeding of the season that is over. */
-export const finished = {
+const finished = {
   pythons: { started: -290, ovulated: -230, shed: -210, laid: -180, hatched: -122 },
   corns: { started: -185, ovulated: -155, shed: -140, laid: -130, hatched: -70 },
 };

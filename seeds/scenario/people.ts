@@ -58,7 +58,7 @@ export const ravi = person(
   null,
   'does the daily work: logs, clutches and hatchlings, no prices',
 );
-export const gwen = person(
+const gwen = person(
   'gwen',
   'Gwen Farthingale',
   'accountant',

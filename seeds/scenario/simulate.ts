@@ -27,7 +27,7 @@ export interface Simulated {
 
 const WILD = ['+', '+'] as const;
 
-export function genotypeOf(animal: Simulated, locus: LocusDefinition): string {
+function genotypeOf(animal: Simulated, locus: LocusDefinition): string {
   return joinAlleles(locus, animal.alleles[locus.id] ?? WILD);
 }
 

@@ -7,7 +7,13 @@ import { configuration } from '../configuration';
  * @returns the message id
  * @throws what the server or the connection said
  */
-export async function deliverMail(mail: { to: string; subject: string; html: string; text: string; id: string }): Promise<string> {
+export async function deliverMail(mail: {
+  to: string;
+  subject: string;
+  html: string;
+  text: string;
+  id: string;
+}): Promise<string> {
   const { smtpUrl, from } = configuration().mail;
   const transport = createTransport(smtpUrl);
   try {

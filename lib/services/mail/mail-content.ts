@@ -8,18 +8,25 @@ export interface MailContent {
   button?: { label: string; link: string };
 }
 
-const decided = (decision: 'agreed' | 'change_asked') => (decision === 'agreed' ? 'agreed' : 'asked for a change');
+const decided = (decision: 'agreed' | 'change_asked') =>
+  decision === 'agreed' ? 'agreed' : 'asked for a change';
 const said = (comment: string) => (comment ? [`“${comment}”`] : []);
 
 const contents: { [Template in MailTemplate]: (data: MailData[Template]) => MailContent } = {
   'verify-address': ({ name, link }) => ({
     heading: `Welcome, ${name}`,
-    paragraphs: ['Confirm that this address is yours; then you can sign in.', 'If you did not ask for this, nothing has to be done.'],
+    paragraphs: [
+      'Confirm that this address is yours; then you can sign in.',
+      'If you did not ask for this, nothing has to be done.',
+    ],
     button: { label: 'Confirm the address', link },
   }),
   'reset-password': ({ name, link }) => ({
     heading: `A new password, ${name}`,
-    paragraphs: ['With this link you set a new password. It works once, for an hour.', 'If you did not ask for this, your password stays as it is.'],
+    paragraphs: [
+      'With this link you set a new password. It works once, for an hour.',
+      'If you did not ask for this, your password stays as it is.',
+    ],
     button: { label: 'Set a new password', link },
   }),
   'sign-in-link': ({ link }) => ({
@@ -85,11 +92,21 @@ const contents: { [Template in MailTemplate]: (data: MailData[Template]) => Mail
     paragraphs: [`${name}, ${decider} ${decided(decision)}.`, ...said(comment)],
     button: { label: 'Open the settlement', link },
   }),
-  'contact-mail': ({ subject, text, seller }) => ({ heading: subject, paragraphs: [...text.split(/\n{2,}/), seller] }),
-  reminder: ({ name, text, link }) => ({ heading: text, paragraphs: [`${name}, this is due.`], button: { label: 'Open it', link } }),
+  'contact-mail': ({ subject, text, seller }) => ({
+    heading: subject,
+    paragraphs: [...text.split(/\n{2,}/), seller],
+  }),
+  reminder: ({ name, text, link }) => ({
+    heading: text,
+    paragraphs: [`${name}, this is due.`],
+    button: { label: 'Open it', link },
+  }),
 };
 
 /** Writes a mail. */
-export function contentOf<Template extends MailTemplate>(template: Template, data: MailData[Template]): MailContent {
+export function contentOf<Template extends MailTemplate>(
+  template: Template,
+  data: MailData[Template],
+): MailContent {
   return contents[template](data);
 }

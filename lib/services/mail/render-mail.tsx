@@ -1,5 +1,16 @@
 import 'server-only';
-import { Body, Button, Container, Head, Heading, Hr, Html, render, Section, Text } from '@react-email/components';
+import {
+  Body,
+  Button,
+  Container,
+  Head,
+  Heading,
+  Hr,
+  Html,
+  render,
+  Section,
+  Text,
+} from '@react-email/components';
 import type { MailContent } from './mail-content';
 
 const ink = '#191C1F';
@@ -10,8 +21,22 @@ function MailLayout({ heading, paragraphs, rows = [], button }: MailContent) {
   return (
     <Html lang="en">
       <Head />
-      <Body style={{ backgroundColor: '#F3EFE6', fontFamily: 'Helvetica, Arial, sans-serif', margin: 0, padding: '24px 0' }}>
-        <Container style={{ backgroundColor: '#FDFBF6', border: '1px solid #DDD6C7', maxWidth: '520px', padding: '28px 32px' }}>
+      <Body
+        style={{
+          backgroundColor: '#F3EFE6',
+          fontFamily: 'Helvetica, Arial, sans-serif',
+          margin: 0,
+          padding: '24px 0',
+        }}
+      >
+        <Container
+          style={{
+            backgroundColor: '#FDFBF6',
+            border: '1px solid #DDD6C7',
+            maxWidth: '520px',
+            padding: '28px 32px',
+          }}
+        >
           <Heading as="h1" style={{ color: ink, fontSize: '20px', lineHeight: '26px', margin: '0 0 16px' }}>
             {heading}
           </Heading>
@@ -29,7 +54,14 @@ function MailLayout({ heading, paragraphs, rows = [], button }: MailContent) {
             <Section style={{ margin: '20px 0 8px' }}>
               <Button
                 href={button.link}
-                style={{ backgroundColor: '#B8461F', borderRadius: '8px', color: '#FFFFFF', fontSize: '15px', fontWeight: 700, padding: '12px 20px' }}
+                style={{
+                  backgroundColor: '#B8461F',
+                  borderRadius: '8px',
+                  color: '#FFFFFF',
+                  fontSize: '15px',
+                  fontWeight: 700,
+                  padding: '12px 20px',
+                }}
               >
                 {button.label}
               </Button>

@@ -17,6 +17,7 @@ export async function sweepMail(): Promise<void> {
     const waiting = await withScope({ workspaceId }, (tx) => waitingMails(tx, before));
     // Mail of the sign-in has no workspace and is seen under every identity: it is swept once.
     const own = waiting.filter((mail) => mail.workspaceId === (workspaceId ?? null));
-    for (const mail of own) await jobQueue.send('mail.send', { mailId: mail.id, workspaceId: mail.workspaceId });
+    for (const mail of own)
+      await jobQueue.send('mail.send', { mailId: mail.id, workspaceId: mail.workspaceId });
   }
 }

@@ -24,7 +24,13 @@ export function standingsOf(partyIds: readonly PartyId[], decisions: readonly De
   return partyIds.map((partyId) => {
     const decision = latest.get(partyId);
     if (!decision) return { partyId, state: 'waiting', by: null, at: null, comment: '' };
-    return { partyId, state: decision.decision, by: decision.by, at: decision.decidedAt, comment: decision.comment };
+    return {
+      partyId,
+      state: decision.decision,
+      by: decision.by,
+      at: decision.decidedAt,
+      comment: decision.comment,
+    };
   });
 }
 
@@ -42,7 +48,9 @@ export function isUnanimous(standings: readonly Standing[]): boolean {
 export function describeStandings(standings: readonly Standing[], nameOf: (id: PartyId) => string): string {
   const { agreed, of } = countAgreed(standings);
   const waiting = standings.filter(({ state }) => state === 'waiting').map(({ partyId }) => nameOf(partyId));
-  const asking = standings.filter(({ state }) => state === 'change_asked').map(({ partyId }) => nameOf(partyId));
+  const asking = standings
+    .filter(({ state }) => state === 'change_asked')
+    .map(({ partyId }) => nameOf(partyId));
   if (agreed === of) return `agreed by all ${of}`;
   const parts = [`${agreed} of ${of} agreed`];
   if (asking.length) parts.push(`${asking.join(', ')} asked for a change`);

@@ -24,8 +24,13 @@ export async function checkProjectMembers(
   animals.forEach((id, index) => {
     if (keeps.has(id)) return;
     const animal = visible.get(id);
-    if (!animal) errors.push({ field: `animals.${index}`, message: 'There is no such animal here, or you may not see it.' });
-    else if (animal.speciesId !== project.speciesId) errors.push({ field: `animals.${index}`, message: `${animal.code} is of another species.` });
+    if (!animal)
+      errors.push({
+        field: `animals.${index}`,
+        message: 'There is no such animal here, or you may not see it.',
+      });
+    else if (animal.speciesId !== project.speciesId)
+      errors.push({ field: `animals.${index}`, message: `${animal.code} is of another species.` });
   });
   return errors;
 }

@@ -15,9 +15,17 @@ export async function findCommentSubject(
   if (kind === 'pairing') {
     const pairing = await findPairing(tx, sees, id as PairingId);
     if (!pairing) throw notFound('pairing');
-    return { projectId: pairing.projectId, title: `${pairing.sireCode} × ${pairing.damCode}`, href: `season/pairings/${id}` };
+    return {
+      projectId: pairing.projectId,
+      title: `${pairing.sireCode} × ${pairing.damCode}`,
+      href: `season/pairings/${id}`,
+    };
   }
   const terms = await findTerms(tx, sees, id as TermsId);
   if (!terms) throw notFound('version of terms');
-  return { projectId: terms.projectId, title: `terms version ${terms.number} of ${terms.projectName}`, href: `projects/${terms.projectId}/terms/${id}` };
+  return {
+    projectId: terms.projectId,
+    title: `terms version ${terms.number} of ${terms.projectName}`,
+    href: `projects/${terms.projectId}/terms/${id}`,
+  };
 }

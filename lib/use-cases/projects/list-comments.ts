@@ -8,5 +8,11 @@ import { findCommentSubject } from './comment-subject';
 export const listCommentsUseCase = workspaceUseCase(listComments, async (world, { params }) => {
   await findCommentSubject(world, params.kind, params.subject);
   const rows = await listCommentsAbout(world.tx, params.kind, params.subject);
-  return { comments: rows.map((row) => ({ ...row, createdAt: row.createdAt.toISOString(), mine: row.memberId === world.actor.memberId })) };
+  return {
+    comments: rows.map((row) => ({
+      ...row,
+      createdAt: row.createdAt.toISOString(),
+      mine: row.memberId === world.actor.memberId,
+    })),
+  };
 });

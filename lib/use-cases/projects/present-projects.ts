@@ -14,7 +14,10 @@ export const presentParties = <Party extends { leftOn: string | null }>(parties:
   parties.filter(({ leftOn }) => leftOn === null);
 
 /** Projects as rows: who is in them, what is in force and what waits for the caller. */
-export async function presentProjects(world: WorkspaceWorld, records: readonly ProjectRecord[]): Promise<ProjectRow[]> {
+export async function presentProjects(
+  world: WorkspaceWorld,
+  records: readonly ProjectRecord[],
+): Promise<ProjectRow[]> {
   const { tx, actor, today } = world;
   const ids = records.map(({ id }) => id);
   const parties = await listPartiesOfProjects(tx, ids);
@@ -26,7 +29,9 @@ export async function presentProjects(world: WorkspaceWorld, records: readonly P
     rows.push({
       ...record,
       species: { id: speciesId, name: speciesName },
-      parties: parties.filter(({ projectId }) => projectId === record.id).map(({ projectId: _project, ...party }) => party),
+      parties: parties
+        .filter(({ projectId }) => projectId === record.id)
+        .map(({ projectId: _project, ...party }) => party),
       ...(seesTerms ? { termsInForce: inForce?.number ?? null } : {}),
       waitingForMe: waiting.get(record.id) ?? 0,
     });
@@ -35,7 +40,11 @@ export async function presentProjects(world: WorkspaceWorld, records: readonly P
 }
 
 /** Per project, the open proposals that the party has not answered yet. */
-async function countWaiting({ tx, sees }: WorkspaceWorld, records: readonly ProjectRecord[], partyId: PartyId | null): Promise<Map<string, number>> {
+async function countWaiting(
+  { tx, sees }: WorkspaceWorld,
+  records: readonly ProjectRecord[],
+  partyId: PartyId | null,
+): Promise<Map<string, number>> {
   const counts = new Map<string, number>();
   if (!partyId) return counts;
   const ids = records.map(({ id }) => id);
@@ -43,18 +52,40 @@ async function countWaiting({ tx, sees }: WorkspaceWorld, records: readonly Proj
   const mine = new Set(parties.map(({ projectId }) => projectId));
   const add = (projectId: string) => counts.set(projectId, (counts.get(projectId) ?? 0) + 1);
 
-  const terms = (await listTermsOf(tx, ids)).filter(({ status, projectId }) => status === 'proposed' && mine.has(projectId));
-  const termsDecisions = await listTermsDecisions(tx, terms.map(({ id }) => id));
+  const terms = (await listTermsOf(tx, ids)).filter(
+    ({ status, projectId }) => status === 'proposed' && mine.has(projectId),
+  );
+  const termsDecisions = await listTermsDecisions(
+    tx,
+    terms.map(({ id }) => id),
+  );
   for (const version of terms) {
-    const [standing] = standingsOf([partyId], termsDecisions.filter(({ subjectId }) => subjectId === version.id));
+    const [standing] = standingsOf(
+      [partyId],
+      termsDecisions.filter(({ subjectId }) => subjectId === version.id),
+    );
     if (standing?.state === 'waiting') add(version.projectId);
   }
-  const pairings = (await listPairingRecords(tx, sees, {})).filter(({ status, projectId }) => status === 'proposed' && mine.has(projectId));
-  const versions = await listPairingVersions(tx, pairings.map(({ id }) => id));
-  const latest = pairings.map((pairing) => ({ pairing, version: versions.find(({ row }) => row.pairingId === pairing.id) }));
-  const decisions = await listPairingDecisions(tx, latest.flatMap(({ version }) => (version ? [version.row.id] : [])));
+  const pairings = (await listPairingRecords(tx, sees, {})).filter(
+    ({ status, projectId }) => status === 'proposed' && mine.has(projectId),
+  );
+  const versions = await listPairingVersions(
+    tx,
+    pairings.map(({ id }) => id),
+  );
+  const latest = pairings.map((pairing) => ({
+    pairing,
+    version: versions.find(({ row }) => row.pairingId === pairing.id),
+  }));
+  const decisions = await listPairingDecisions(
+    tx,
+    latest.flatMap(({ version }) => (version ? [version.row.id] : [])),
+  );
   for (const { pairing, version } of latest) {
-    const [standing] = standingsOf([partyId], decisions.filter(({ subjectId }) => subjectId === version?.row.id));
+    const [standing] = standingsOf(
+      [partyId],
+      decisions.filter(({ subjectId }) => subjectId === version?.row.id),
+    );
     if (standing?.state === 'waiting') add(pairing.projectId);
   }
   return counts;

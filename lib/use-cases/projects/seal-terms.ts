@@ -11,7 +11,10 @@ import { isUnanimous, standingsOf } from './agreement';
 export async function sealTermsWhenUnanimous({ tx, now }: WorkspaceWorld, id: TermsId): Promise<boolean> {
   const record = await findTerms(tx, { everything: true }, id);
   if (!record) throw notFound('version of terms');
-  const standings = standingsOf(record.content.parties.map((party) => party.id), await listTermsDecisions(tx, [id]));
+  const standings = standingsOf(
+    record.content.parties.map((party) => party.id),
+    await listTermsDecisions(tx, [id]),
+  );
   if (!isUnanimous(standings)) return false;
   await lockProject(tx, record.projectId);
   const previousHash = await lastTermsHash(tx, record.projectId);

@@ -27,9 +27,16 @@ export const showTermsUseCase = workspaceUseCase(showTerms, async (world, { para
     project: { id: found.projectId, name: found.projectName },
     version: found.version,
     comparedWith: before ? { id: before.id, number: before.number } : null,
-    clauses: compareClauses(termsWords(found.content, nameOf), before ? termsWords(before.content, nameOf) : null),
+    clauses: compareClauses(
+      termsWords(found.content, nameOf),
+      before ? termsWords(before.content, nameOf) : null,
+    ),
     standings: presentStandings(shown.standings, reachOf(actor.role, 'comment.write') !== 'no'),
-    me: { partyId: actor.partyId, mayDecide: isOpen && mine !== undefined && reachOf(actor.role, 'terms.decide') !== 'no', state: mine?.state ?? null },
+    me: {
+      partyId: actor.partyId,
+      mayDecide: isOpen && mine !== undefined && reachOf(actor.role, 'terms.decide') !== 'no',
+      state: mine?.state ?? null,
+    },
     mayPropose: reachOf(actor.role, 'terms.propose') !== 'no',
   };
 });

@@ -12,9 +12,15 @@ export interface TermsStanding {
 }
 
 /** Every version of a project's terms with where each of its parties stands, newest first. */
-export async function loadTermsStandings({ tx }: Pick<WorkspaceWorld, 'tx'>, projectId: ProjectId): Promise<{ versions: TermsStanding[]; partyIds: PartyId[]; nameOf: (id: string) => string }> {
+export async function loadTermsStandings(
+  { tx }: Pick<WorkspaceWorld, 'tx'>,
+  projectId: ProjectId,
+): Promise<{ versions: TermsStanding[]; partyIds: PartyId[]; nameOf: (id: string) => string }> {
   const versions = await listTermsOf(tx, [projectId]);
-  const decisions = await listTermsDecisions(tx, versions.map(({ id }) => id));
+  const decisions = await listTermsDecisions(
+    tx,
+    versions.map(({ id }) => id),
+  );
   const parties = await listPartiesOfProjects(tx, [projectId]);
   const names = new Map<string, string>(parties.map(({ id, name }) => [id, name]));
   return {
@@ -22,7 +28,10 @@ export async function loadTermsStandings({ tx }: Pick<WorkspaceWorld, 'tx'>, pro
     nameOf: (id) => names.get(id) ?? 'another party',
     versions: versions.map((record) => ({
       record,
-      standings: standingsOf(record.content.parties.map(({ id }) => id), decisions.filter(({ subjectId }) => subjectId === record.id)),
+      standings: standingsOf(
+        record.content.parties.map(({ id }) => id),
+        decisions.filter(({ subjectId }) => subjectId === record.id),
+      ),
     })),
   };
 }

@@ -15,7 +15,10 @@ const fees: Record<TermsContent['cardFees'], string> = {
 export const percentOf = (basisPoints: number) => `${String(basisPoints / 100)}%`;
 
 /** Terms clause by clause in words. */
-export function termsWords(content: Omit<TermsContent, 'parties'> & { parties: readonly { id: string; rank: number }[] }, nameOf: (id: string) => string): { title: string; text: string }[] {
+export function termsWords(
+  content: Omit<TermsContent, 'parties'> & { parties: readonly { id: string; rank: number }[] },
+  nameOf: (id: string) => string,
+): { title: string; text: string }[] {
   const { damSide, sireSide, houseShare } = content;
   const all = damSide + sireSide;
   const order = [...content.parties].sort((a, b) => a.rank - b.rank).map(({ id }) => nameOf(id));
@@ -23,8 +26,18 @@ export function termsWords(content: Omit<TermsContent, 'parties'> & { parties: r
     { title: 'Parties, in order of rank', text: order.join(', ') },
     { title: 'Dam side', text: `${damSide} of ${all}, to the owners of the dam by their parts` },
     { title: 'Sire side', text: `${sireSide} of ${all}, to the owners of the sire by their parts` },
-    { title: 'House share', text: houseShare ? `${percentOf(houseShare.basisPoints)} off the top, to ${nameOf(houseShare.partyId)}` : 'none' },
-    { title: 'Costs', text: content.costsFirst ? 'Recorded costs of a clutch are recovered first.' : 'Costs stay with who paid them.' },
+    {
+      title: 'House share',
+      text: houseShare
+        ? `${percentOf(houseShare.basisPoints)} off the top, to ${nameOf(houseShare.partyId)}`
+        : 'none',
+    },
+    {
+      title: 'Costs',
+      text: content.costsFirst
+        ? 'Recorded costs of a clutch are recovered first.'
+        : 'Costs stay with who paid them.',
+    },
     { title: 'Card fees', text: fees[content.cardFees] },
     { title: 'Division', text: divisions[content.division] },
     { title: 'If an animal dies', text: content.clauses.death || 'not said' },
@@ -34,7 +47,10 @@ export function termsWords(content: Omit<TermsContent, 'parties'> & { parties: r
 }
 
 /** Clauses beside those of the version before. */
-export function compareClauses(now: readonly { title: string; text: string }[], before: readonly { title: string; text: string }[] | null): ClauseLine[] {
+export function compareClauses(
+  now: readonly { title: string; text: string }[],
+  before: readonly { title: string; text: string }[] | null,
+): ClauseLine[] {
   return now.map(({ title, text }) => {
     const earlier = before?.find((clause) => clause.title === title)?.text ?? null;
     return { title, text, before: earlier, changed: before !== null && earlier !== text };

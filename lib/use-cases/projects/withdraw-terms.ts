@@ -12,11 +12,27 @@ export const withdrawTermsUseCase = workspaceUseCase(withdrawTerms, async (world
   await lockTerms(tx, params.terms);
   const record = await findTerms(tx, sees, params.terms);
   if (!record || record.projectId !== params.project) throw notFound('version of terms');
-  if (record.status === 'agreed') throw new Refusal('wrong_state', 'An agreed version is not withdrawn: propose a new version instead.');
+  if (record.status === 'agreed')
+    throw new Refusal('wrong_state', 'An agreed version is not withdrawn: propose a new version instead.');
   if (record.status !== 'proposed') throw new Refusal('wrong_state', 'This version is not open any more.');
   if (body.version !== record.version) throw stale('version of terms', record.version);
   await setTermsStatus(tx, record.id, { status: 'withdrawn' });
-  await notifyParties(world, record.content.parties.map(({ id }) => id), { kind: 'terms-withdrawn', title: `${actor.name} withdrew terms version ${record.number} of ${record.projectName}`, body: body.reason, href: `projects/${record.projectId}/terms/${record.id}` }, actor.memberId);
-  await recordAudit(world, { action: 'terms.withdraw', subject: { kind: 'terms', id: record.id }, detail: { number: record.number }, reason: body.reason });
+  await notifyParties(
+    world,
+    record.content.parties.map(({ id }) => id),
+    {
+      kind: 'terms-withdrawn',
+      title: `${actor.name} withdrew terms version ${record.number} of ${record.projectName}`,
+      body: body.reason,
+      href: `projects/${record.projectId}/terms/${record.id}`,
+    },
+    actor.memberId,
+  );
+  await recordAudit(world, {
+    action: 'terms.withdraw',
+    subject: { kind: 'terms', id: record.id },
+    detail: { number: record.number },
+    reason: body.reason,
+  });
   return { status: 'withdrawn' as const };
 });

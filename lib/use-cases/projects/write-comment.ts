@@ -13,10 +13,30 @@ import { presentParties } from './present-projects';
 export const writeCommentUseCase = workspaceUseCase(writeComment, async (world, { params, body }) => {
   const { tx, workspace, actor } = world;
   const subject = await findCommentSubject(world, params.kind, params.subject);
-  const row = await insertComment(tx, { workspaceId: workspace.id, subjectKind: params.kind, subjectId: params.subject, memberId: actor.memberId, body: body.body });
+  const row = await insertComment(tx, {
+    workspaceId: workspace.id,
+    subjectKind: params.kind,
+    subjectId: params.subject,
+    memberId: actor.memberId,
+    body: body.body,
+  });
   if (!row) throw notFound('comment');
   const parties = presentParties(await listPartiesOfProjects(tx, [subject.projectId]));
-  await notifyParties(world, parties.map(({ id }) => id), { kind: 'comment', title: `${actor.name} on ${subject.title}`, body: body.body.slice(0, 280), href: subject.href }, actor.memberId);
-  await recordAudit(world, { action: 'comment.write', subject: { kind: params.kind, id: params.subject }, detail: { commentId: row.id } });
+  await notifyParties(
+    world,
+    parties.map(({ id }) => id),
+    {
+      kind: 'comment',
+      title: `${actor.name} on ${subject.title}`,
+      body: body.body.slice(0, 280),
+      href: subject.href,
+    },
+    actor.memberId,
+  );
+  await recordAudit(world, {
+    action: 'comment.write',
+    subject: { kind: params.kind, id: params.subject },
+    detail: { commentId: row.id },
+  });
   return { ...row, createdAt: row.createdAt.toISOString(), mine: true };
 });

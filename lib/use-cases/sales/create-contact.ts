@@ -7,6 +7,10 @@ import { workspaceUseCase } from '../world';
 /** A buyer or another contact is added. */
 export const createContactUseCase = workspaceUseCase(createContact, async (world, { body }) => {
   const id = await insertContact(world.tx, { ...body, workspaceId: world.workspace.id });
-  await recordAudit(world, { action: 'contact.create', subject: { kind: 'contact', id }, detail: { name: body.name } });
+  await recordAudit(world, {
+    action: 'contact.create',
+    subject: { kind: 'contact', id },
+    detail: { name: body.name },
+  });
   return { id };
 });

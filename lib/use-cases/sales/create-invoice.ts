@@ -17,13 +17,18 @@ export const createInvoiceUseCase = workspaceUseCase(createInvoice, async (world
   if (!contact) throw invalid('contactId', 'There is no such contact.');
   if (body.balanceDueOn < today) throw invalid('balanceDueOn', 'This day is over.');
   const records = await findSellable(world, body);
-  const describe = await describeAnimals(tx, records.map(({ animalId, speciesId }) => ({ id: animalId, speciesId })));
+  const describe = await describeAnimals(
+    tx,
+    records.map(({ animalId, speciesId }) => ({ id: animalId, speciesId })),
+  );
 
   const subtotal = body.animals.reduce((sum, { price }) => sum + price, 0);
-  if (body.discount > subtotal) throw invalid('discount', 'The discount is larger than the price of the animals.');
+  if (body.discount > subtotal)
+    throw invalid('discount', 'The discount is larger than the price of the animals.');
   const tax = shareOfBasisPoints(subtotal - body.discount, body.taxBasisPoints);
   const total = subtotal - body.discount + body.shipping + tax;
-  if (body.deposit >= total) throw invalid('deposit', 'A deposit is less than the whole. Leave it out if all is due at once.');
+  if (body.deposit >= total)
+    throw invalid('deposit', 'A deposit is less than the whole. Leave it out if all is due at once.');
 
   const animalLines = body.animals.map(({ animalId, price }) => {
     const record = records.find((candidate) => candidate.animalId === animalId);
@@ -52,13 +57,27 @@ export const createInvoiceUseCase = workspaceUseCase(createInvoice, async (world
     },
     [
       ...animalLines,
-      ...(body.discount > 0 ? [{ kind: 'discount' as const, description: 'Discount', amount: -body.discount }] : []),
-      ...(body.shipping > 0 ? [{ kind: 'shipping' as const, description: 'Shipping', amount: body.shipping, taxed: 0 }] : []),
+      ...(body.discount > 0
+        ? [{ kind: 'discount' as const, description: 'Discount', amount: -body.discount }]
+        : []),
+      ...(body.shipping > 0
+        ? [{ kind: 'shipping' as const, description: 'Shipping', amount: body.shipping, taxed: 0 }]
+        : []),
     ],
     planDues(body, total),
   );
-  await setListingStates(tx, workspace.id, body.animals.map(({ animalId }) => animalId), 'invoiced', now);
-  await recordAudit(world, { action: 'invoice.create', subject: { kind: 'invoice', id }, detail: { contactId: contact.id, total } });
+  await setListingStates(
+    tx,
+    workspace.id,
+    body.animals.map(({ animalId }) => animalId),
+    'invoiced',
+    now,
+  );
+  await recordAudit(world, {
+    action: 'invoice.create',
+    subject: { kind: 'invoice', id },
+    detail: { contactId: contact.id, total },
+  });
   return { id };
 });
 
@@ -72,8 +91,10 @@ async function findSellable({ tx, sees }: WorkspaceWorld, draft: InvoiceDraft): 
   draft.animals.forEach(({ animalId }, index) => {
     const record = records.find((candidate) => candidate.animalId === animalId);
     if (!record) throw notFound('animal');
-    if (!['here', 'on_loan', 'quarantine'].includes(record.status)) throw invalid(`animals.${index}.animalId`, `${record.code} is not here any more.`);
-    if (taken.includes(animalId)) throw invalid(`animals.${index}.animalId`, `${record.code} already stands on an invoice.`);
+    if (!['here', 'on_loan', 'quarantine'].includes(record.status))
+      throw invalid(`animals.${index}.animalId`, `${record.code} is not here any more.`);
+    if (taken.includes(animalId))
+      throw invalid(`animals.${index}.animalId`, `${record.code} already stands on an invoice.`);
     if (record.state === 'held' && record.heldForId && record.heldForId !== draft.contactId) {
       throw new Refusal('wrong_state', `${record.code} is held for ${record.heldForName}.`, {
         errors: [{ field: `animals.${index}.animalId`, message: `Held for ${record.heldForName}.` }],
@@ -84,6 +105,12 @@ async function findSellable({ tx, sees }: WorkspaceWorld, draft: InvoiceDraft): 
 }
 
 function planDues({ deposit, depositDueOn, balanceDueOn }: InvoiceDraft, total: number) {
-  const balance = { label: deposit > 0 ? 'Balance' : 'Whole amount', dueOn: balanceDueOn, amount: total - deposit };
-  return deposit > 0 && depositDueOn ? [{ label: 'Deposit', dueOn: depositDueOn, amount: deposit }, balance] : [balance];
+  const balance = {
+    label: deposit > 0 ? 'Balance' : 'Whole amount',
+    dueOn: balanceDueOn,
+    amount: total - deposit,
+  };
+  return deposit > 0 && depositDueOn
+    ? [{ label: 'Deposit', dueOn: depositDueOn, amount: deposit }, balance]
+    : [balance];
 }

@@ -11,8 +11,10 @@ export const editContactUseCase = workspaceUseCase(editContact, async (world, { 
   const contact = await findContact(tx, params.contact);
   if (!contact) throw notFound('contact');
   const { version, ...fields } = body;
-  const followUpReminderSentOn = fields.followUpOn === contact.followUpOn ? contact.followUpReminderSentOn : null;
-  if (!(await updateContact(tx, contact.id, version, { ...fields, followUpReminderSentOn }))) throw stale('contact', contact.version);
+  const followUpReminderSentOn =
+    fields.followUpOn === contact.followUpOn ? contact.followUpReminderSentOn : null;
+  if (!(await updateContact(tx, contact.id, version, { ...fields, followUpReminderSentOn })))
+    throw stale('contact', contact.version);
   await recordAudit(world, { action: 'contact.edit', subject: { kind: 'contact', id: contact.id } });
   return { version: version + 1 };
 });

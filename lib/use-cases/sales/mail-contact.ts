@@ -20,7 +20,17 @@ export const mailContactUseCase = workspaceUseCase(mailContact, async (world, { 
     data: { ...body, seller: workspace.name },
   });
   const event = { kind: 'mail' as const, body: `${body.subject}\n\n${body.text}` };
-  const id = await insertContactEvent(tx, { ...event, workspaceId: workspace.id, contactId: contact.id, happenedAt: now, recordedBy: actor.memberId });
-  await recordAudit(world, { action: 'contact.mail', subject: { kind: 'contact', id: contact.id }, detail: { subject: body.subject } });
+  const id = await insertContactEvent(tx, {
+    ...event,
+    workspaceId: workspace.id,
+    contactId: contact.id,
+    happenedAt: now,
+    recordedBy: actor.memberId,
+  });
+  await recordAudit(world, {
+    action: 'contact.mail',
+    subject: { kind: 'contact', id: contact.id },
+    detail: { subject: body.subject },
+  });
   return { id, ...event, happenedAt: now.toISOString(), by: actor.name };
 });

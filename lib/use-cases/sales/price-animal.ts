@@ -15,17 +15,26 @@ export const priceAnimalUseCase = workspaceUseCase(priceAnimal, async (world, { 
   if (listing.state === 'invoiced' || listing.state === 'sold') {
     throw new Refusal('wrong_state', 'This animal stands on an invoice. Void the invoice first.');
   }
-  if (body.heldFor && !(await findContact(tx, body.heldFor))) throw invalid('heldFor', 'There is no such contact.');
+  if (body.heldFor && !(await findContact(tx, body.heldFor)))
+    throw invalid('heldFor', 'There is no such contact.');
   if (body.heldUntil && body.heldUntil < today) throw invalid('heldUntil', 'This day is over.');
   const { version, heldUntil, ...change } = body;
   const saved = await saveListing(
     tx,
     { workspaceId: workspace.id, animalId: params.animal, seen: version },
-    { ...change, heldFor: body.state === 'held' ? body.heldFor : null, heldUntil: body.state === 'held' && heldUntil ? new Date(`${heldUntil}T23:59:59Z`) : null },
+    {
+      ...change,
+      heldFor: body.state === 'held' ? body.heldFor : null,
+      heldUntil: body.state === 'held' && heldUntil ? new Date(`${heldUntil}T23:59:59Z`) : null,
+    },
     now,
   );
   if (!saved) throw stale('listing', listing.version);
-  await recordAudit(world, { action: 'listing.set', subject: { kind: 'animal', id: params.animal }, detail: { state: body.state, price: body.price } });
+  await recordAudit(world, {
+    action: 'listing.set',
+    subject: { kind: 'animal', id: params.animal },
+    detail: { state: body.state, price: body.price },
+  });
   const [row] = await presentListings(world, await findListings(tx, sees, [params.animal]));
   if (!row) throw notFound('animal');
   return row;

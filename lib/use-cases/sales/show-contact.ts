@@ -1,5 +1,11 @@
 import 'server-only';
-import { findContact, listAnimalsOfContact, listContactEvents, listDocumentsOfContact, listInvoicesOfContact } from '@/db/queries/contacts';
+import {
+  findContact,
+  listAnimalsOfContact,
+  listContactEvents,
+  listDocumentsOfContact,
+  listInvoicesOfContact,
+} from '@/db/queries/contacts';
 import { showContact } from '@/lib/contracts/contact';
 import { notFound } from '../refusal';
 import { workspaceUseCase } from '../world';

@@ -29,7 +29,9 @@ export const showInvoiceUseCase = workspaceUseCase(showInvoice, async ({ tx, see
     instalments: withOpenAmounts(await listInstalments(tx, invoice.id), invoice.paid - invoice.refunded),
     payments: payments.map((payment) => ({
       ...payment,
-      refunded: standing.filter((refund) => refund.paymentId === payment.id).reduce((sum, refund) => sum + refund.amount, 0),
+      refunded: standing
+        .filter((refund) => refund.paymentId === payment.id)
+        .reduce((sum, refund) => sum + refund.amount, 0),
     })),
     refunds,
     buyerEmail: record.contactEmail,

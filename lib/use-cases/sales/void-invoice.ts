@@ -15,9 +15,16 @@ export const voidInvoiceUseCase = workspaceUseCase(voidInvoice, async (world, { 
   if (invoice.status !== 'draft' && invoice.status !== 'sent') {
     throw new Refusal('wrong_state', 'Money came in on this invoice. Refund it instead.');
   }
-  if (!(await updateInvoice(tx, invoice.id, body.version, { status: 'void', voidedAt: now, linkHash: null }))) throw stale('invoice', invoice.version);
-  const animalIds = (await listLines(tx, [invoice.id])).flatMap(({ animalId }) => (animalId ? [animalId] : []));
+  if (!(await updateInvoice(tx, invoice.id, body.version, { status: 'void', voidedAt: now, linkHash: null })))
+    throw stale('invoice', invoice.version);
+  const animalIds = (await listLines(tx, [invoice.id])).flatMap(({ animalId }) =>
+    animalId ? [animalId] : [],
+  );
   await setListingStates(tx, workspace.id, animalIds, 'listed', now);
-  await recordAudit(world, { action: 'invoice.void', subject: { kind: 'invoice', id: invoice.id }, reason: body.reason });
+  await recordAudit(world, {
+    action: 'invoice.void',
+    subject: { kind: 'invoice', id: invoice.id },
+    reason: body.reason,
+  });
   return { version: body.version + 1 };
 });

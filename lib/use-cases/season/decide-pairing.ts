@@ -1,5 +1,12 @@
 import 'server-only';
-import { findPairing, insertPairingDecision, lastPairingHash, lockPairing, lockPairingVersion, setPairing } from '@/db/queries/pairings';
+import {
+  findPairing,
+  insertPairingDecision,
+  lastPairingHash,
+  lockPairing,
+  lockPairingVersion,
+  setPairing,
+} from '@/db/queries/pairings';
 import { lockProject } from '@/db/queries/projects';
 import { decidePairing } from '@/lib/contracts/pairing';
 import { recordAudit } from '../audit';
@@ -25,22 +32,47 @@ export const decidePairingUseCase = workspaceUseCase(decidePairing, async (world
   if (!current || !seen) throw notFound('version of this pairing');
   if (seen !== current) {
     const { number } = current.version.row;
-    throw new Refusal('stale', `Version ${seen.version.row.number} was replaced by version ${number} in the meantime. Your answer was not recorded; look at version ${number} and answer that.`, { currentVersion: number });
+    throw new Refusal(
+      'stale',
+      `Version ${seen.version.row.number} was replaced by version ${number} in the meantime. Your answer was not recorded; look at version ${number} and answer that.`,
+      { currentVersion: number },
+    );
   }
   if (record.status !== 'proposed') {
-    throw new Refusal('wrong_state', record.status === 'agreed' ? 'This pairing is agreed by all and locked; its answers can’t change any more.' : 'This pairing is no longer open for answers.');
+    throw new Refusal(
+      'wrong_state',
+      record.status === 'agreed'
+        ? 'This pairing is agreed by all and locked; its answers can’t change any more.'
+        : 'This pairing is no longer open for answers.',
+    );
   }
 
-  await insertPairingDecision(tx, { workspaceId: workspace.id, pairingVersionId: seen.version.row.id, partyId: actor.partyId, decision: body.decision, comment: body.comment, decidedBy: actor.memberId, decidedAt: now });
+  await insertPairingDecision(tx, {
+    workspaceId: workspace.id,
+    pairingVersionId: seen.version.row.id,
+    partyId: actor.partyId,
+    decision: body.decision,
+    comment: body.comment,
+    decidedBy: actor.memberId,
+    decidedAt: now,
+  });
   const after = await loadCurrent(world, params.pairing);
   const locked = await sealWhenUnanimous(world, after);
-  await recordAudit(world, { action: 'pairing.decide', subject: { kind: 'pairing', id: record.id }, detail: { number: seen.version.row.number, decision: body.decision, locked }, reason: body.comment });
+  await recordAudit(world, {
+    action: 'pairing.decide',
+    subject: { kind: 'pairing', id: record.id },
+    detail: { number: seen.version.row.number, decision: body.decision, locked },
+    reason: body.comment,
+  });
   const standings = after.versions[0]?.standings ?? [];
   await tellDecision(world, after, body, locked);
   return { status: locked ? ('agreed' as const) : record.status, ...countAgreed(standings) };
 });
 
-export async function loadCurrent(world: WorkspaceWorld, id: PairingStanding['record']['id']): Promise<PairingStanding> {
+export async function loadCurrent(
+  world: WorkspaceWorld,
+  id: PairingStanding['record']['id'],
+): Promise<PairingStanding> {
   const record = await findPairing(world.tx, { everything: true }, id);
   const [standing] = record ? await loadStandings(world, [record]) : [];
   if (!standing) throw notFound('pairing');
@@ -48,14 +80,23 @@ export async function loadCurrent(world: WorkspaceWorld, id: PairingStanding['re
 }
 
 /** Locks the newest version if every party has agreed to it, chained by hash to what the project locked before. */
-export async function sealWhenUnanimous({ tx, now }: WorkspaceWorld, { record, versions }: PairingStanding): Promise<boolean> {
+export async function sealWhenUnanimous(
+  { tx, now }: WorkspaceWorld,
+  { record, versions }: PairingStanding,
+): Promise<boolean> {
   const current = versions[0];
   if (!current || !isUnanimous(current.standings)) return false;
   await lockProject(tx, record.projectId);
   const { row } = current.version;
   const previousHash = await lastPairingHash(tx, record.projectId);
   const hash = chainHash(previousHash, {
-    pairing: { id: record.id, projectId: record.projectId, season: record.season, sireId: record.sireId, damId: record.damId },
+    pairing: {
+      id: record.id,
+      projectId: record.projectId,
+      season: record.season,
+      sireId: record.sireId,
+      damId: record.damId,
+    },
     number: row.number,
     termsId: row.termsId,
     plan: row.plan,

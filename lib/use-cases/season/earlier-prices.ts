@@ -11,7 +11,11 @@ export interface EarlierPrice {
 }
 
 /** Median price of earlier sales per look, by the key of the outcome table; only sales of animals that the caller sees. */
-export async function loadEarlierPrices({ tx, sees }: WorkspaceWorld, speciesId: SpeciesId, beliefs: SpeciesBeliefs): Promise<Map<string, EarlierPrice>> {
+export async function loadEarlierPrices(
+  { tx, sees }: WorkspaceWorld,
+  speciesId: SpeciesId,
+  beliefs: SpeciesBeliefs,
+): Promise<Map<string, EarlierPrice>> {
   const prices = new Map<string, number[]>();
   for (const { animalId, amount } of await listSalesOfSpecies(tx, sees, speciesId)) {
     const shown = beliefs.loci.flatMap((locus) => {

@@ -10,7 +10,9 @@ const CLOSE = 1e-10;
  * simple fractions do not add up to 1 the doubles are rounded to millionths instead.
  */
 export function exactBelief(genotypes: readonly GenotypeOdds[]): Belief {
-  const simple = new Map(genotypes.map(({ genotype, probability }) => [genotype, new Fraction(probability).simplify(CLOSE)]));
+  const simple = new Map(
+    genotypes.map(({ genotype, probability }) => [genotype, new Fraction(probability).simplify(CLOSE)]),
+  );
   const total = [...simple.values()].reduce((sum, chance) => sum.add(chance), new Fraction(0));
   if (total.equals(1)) return new Map([...simple].filter(([, chance]) => chance.gt(0)));
   return fromNumbers(new Map(genotypes.map(({ genotype, probability }) => [genotype, probability])));

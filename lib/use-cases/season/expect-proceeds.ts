@@ -11,7 +11,12 @@ export function expectProceeds(
   outcomes: readonly { odds: string; price: number | null }[],
   clutch: { eggs: number; hatchRate: string; lethal: string },
 ): { proceeds: number; hatchlings: number } {
-  const hatchlings = new Fraction(clutch.eggs).mul(new Fraction(clutch.hatchRate)).mul(new Fraction(1).sub(new Fraction(clutch.lethal)));
-  const each = outcomes.reduce((sum, { odds, price }) => (price === null ? sum : sum.add(new Fraction(odds).mul(price))), new Fraction(0));
+  const hatchlings = new Fraction(clutch.eggs)
+    .mul(new Fraction(clutch.hatchRate))
+    .mul(new Fraction(1).sub(new Fraction(clutch.lethal)));
+  const each = outcomes.reduce(
+    (sum, { odds, price }) => (price === null ? sum : sum.add(new Fraction(odds).mul(price))),
+    new Fraction(0),
+  );
   return { proceeds: Number(each.mul(hatchlings).round(0).valueOf()), hatchlings: hatchlings.valueOf() };
 }

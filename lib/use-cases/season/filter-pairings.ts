@@ -2,7 +2,10 @@ import type { PartyId } from '@/lib/contracts/ids';
 import type { PairingRow } from '@/lib/contracts/pairing';
 
 /** Whether a row is in the state asked for; a withdrawn pairing is shown only when asked for. */
-export function isInState(row: PairingRow, state: 'waiting' | 'mine' | 'agreed' | 'change_asked' | 'withdrawn' | undefined): boolean {
+export function isInState(
+  row: PairingRow,
+  state: 'waiting' | 'mine' | 'agreed' | 'change_asked' | 'withdrawn' | undefined,
+): boolean {
   switch (state) {
     case undefined:
       return row.status !== 'withdrawn';

@@ -6,8 +6,11 @@ import { workspaceUseCase } from '../world';
 import { presentPairingEvent } from './pairing-event';
 
 /** A member reads what was seen of a pairing. */
-export const listPairingEventsUseCase = workspaceUseCase(listPairingEvents, async ({ tx, sees }, { params }) => {
-  if (!(await findPairingForLog(tx, sees, params.pairing))) throw notFound('pairing');
-  const rows = await listEventsOfPairing(tx, params.pairing);
-  return { events: rows.map(presentPairingEvent) };
-});
+export const listPairingEventsUseCase = workspaceUseCase(
+  listPairingEvents,
+  async ({ tx, sees }, { params }) => {
+    if (!(await findPairingForLog(tx, sees, params.pairing))) throw notFound('pairing');
+    const rows = await listEventsOfPairing(tx, params.pairing);
+    return { events: rows.map(presentPairingEvent) };
+  },
+);

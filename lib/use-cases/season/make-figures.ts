@@ -31,7 +31,10 @@ export interface ChosenPair {
 }
 
 export interface MadeFigures {
-  figures: Omit<PairingFigures, 'termsId' | 'termsNumber'> & { termsId: PairingFigures['termsId'] | null; termsNumber: number | null };
+  figures: Omit<PairingFigures, 'termsId' | 'termsNumber'> & {
+    termsId: PairingFigures['termsId'] | null;
+    termsNumber: number | null;
+  };
   prices: Record<string, number>;
   /** Outcome keys whose price is a median, with how many sales it stands on. */
   medians: Record<string, number>;
@@ -53,16 +56,31 @@ export async function makeFigures(world: WorkspaceWorld, chosen: ChosenPair): Pr
   const parents = await describeParents(world, chosen, beliefs, pair);
 
   const pedigree = await loadPedigree(tx, project.speciesId);
-  const inProject = await visibleIdsOfSpecies(tx, { everything: false, partyId: null, projectIds: [project.id] }, project.speciesId);
+  const inProject = await visibleIdsOfSpecies(
+    tx,
+    { everything: false, partyId: null, projectIds: [project.id] },
+    project.speciesId,
+  );
   const relation = relationFigures(pedigree.rows, pair, (id) => inProject.has(id as AnimalId));
   const refusals = await listRefusals(tx, [sire.id, dam.id]);
 
   const earlier = await loadEarlierPrices(world, project.speciesId, beliefs);
   const { prices, medians } = choosePrices(pair, chosen.prices, earlier);
   const outcomes = pair.table.rows.map(({ key, looksLike, carries, odds, probability, atLeastOne, sex }) => ({
-    key, looksLike, carries, odds, probability, atLeastOne, sex, price: prices[key] ?? null,
+    key,
+    looksLike,
+    carries,
+    odds,
+    probability,
+    atLeastOne,
+    sex,
+    price: prices[key] ?? null,
   }));
-  const { proceeds, hatchlings } = expectProceeds(outcomes, { eggs, hatchRate: profile.hatchRate.fraction, lethal: pair.table.lethal });
+  const { proceeds, hatchlings } = expectProceeds(outcomes, {
+    eggs,
+    hatchRate: profile.hatchRate.fraction,
+    lethal: pair.table.lethal,
+  });
 
   const terms = await findTermsInForce(tx, project.id, startsOn);
   const parties = (await listPartiesOfProjects(tx, [project.id])).map(({ id, name }) => ({ id, name }));
@@ -89,17 +107,33 @@ export async function makeFigures(world: WorkspaceWorld, chosen: ChosenPair): Pr
       commonAncestors: relation.commonAncestors,
       eggsExpected: eggs,
       hatchlingsExpected: hatchlings,
-      warnings: pairWarnings(parents, { limits: workspace.limits, profile, onDay: startsOn, relation, refusals }),
+      warnings: pairWarnings(parents, {
+        limits: workspace.limits,
+        profile,
+        onDay: startsOn,
+        relation,
+        refusals,
+      }),
       cautions: cautionsOf(pair),
       termsId: terms?.id ?? null,
       termsNumber: terms?.number ?? null,
       youngParts: split.youngParts,
-      proceeds: { expected: proceeds, currency: workspace.currency, steps: split.steps, shares: split.shares },
+      proceeds: {
+        expected: proceeds,
+        currency: workspace.currency,
+        steps: split.steps,
+        shares: split.shares,
+      },
     },
   };
 }
 
-async function describeParents({ tx }: WorkspaceWorld, { sire, dam, startsOn }: ChosenPair, beliefs: SpeciesBeliefs, { loci }: CrossedPair): Promise<PairingFigures['parents']> {
+async function describeParents(
+  { tx }: WorkspaceWorld,
+  { sire, dam, startsOn }: ChosenPair,
+  beliefs: SpeciesBeliefs,
+  { loci }: CrossedPair,
+): Promise<PairingFigures['parents']> {
   const held = await listPartsInForce(tx, [sire.id, dam.id]);
   const weights = await listLatestWeights(tx, [sire.id, dam.id]);
   const describe = (parent: ChosenPair['sire']): ParentFigures => {
@@ -113,10 +147,17 @@ async function describeParents({ tx }: WorkspaceWorld, { sire, dam, startsOn }: 
       ageMonths: parent.hatchedOn ? wholeMonths(parent.hatchedOn, startsOn) : null,
       grams: weight?.grams ?? null,
       weighedOn: weight?.weighedOn ?? null,
-      parts: held.filter(({ animalId }) => animalId === parent.id).map(({ partyId, parts }) => ({ partyId, parts })),
+      parts: held
+        .filter(({ animalId }) => animalId === parent.id)
+        .map(({ partyId, parts }) => ({ partyId, parts })),
       loci: loci.map((locus) => {
         const belief = beliefs.belief(parent.id, locus.id);
-        return { locusId: locus.id, name: locus.name, ...drawnCopies(beliefs, belief), words: beliefs.words(belief) };
+        return {
+          locusId: locus.id,
+          name: locus.name,
+          ...drawnCopies(beliefs, belief),
+          words: beliefs.words(belief),
+        };
       }),
     };
   };
@@ -124,7 +165,11 @@ async function describeParents({ tx }: WorkspaceWorld, { sire, dam, startsOn }: 
 }
 
 /** Prices as given, or medians of earlier sales of the same look. */
-function choosePrices({ table }: CrossedPair, given: ChosenPair['prices'], earlier: Awaited<ReturnType<typeof loadEarlierPrices>>): Pick<MadeFigures, 'prices' | 'medians'> {
+function choosePrices(
+  { table }: CrossedPair,
+  given: ChosenPair['prices'],
+  earlier: Awaited<ReturnType<typeof loadEarlierPrices>>,
+): Pick<MadeFigures, 'prices' | 'medians'> {
   const prices: Record<string, number> = {};
   const medians: Record<string, number> = {};
   for (const { key } of table.rows) {

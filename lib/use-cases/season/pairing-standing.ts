@@ -1,5 +1,10 @@
 import 'server-only';
-import { listPairingDecisions, listPairingVersions, type PairingRecord, type PairingVersionRecord } from '@/db/queries/pairings';
+import {
+  listPairingDecisions,
+  listPairingVersions,
+  type PairingRecord,
+  type PairingVersionRecord,
+} from '@/db/queries/pairings';
 import { listPartiesOfProjects } from '@/db/queries/projects';
 import type { PartyId, ProjectId } from '@/lib/contracts/ids';
 import { presentParties } from '../projects/present-projects';
@@ -15,11 +20,23 @@ export interface PairingStanding {
 }
 
 /** Pairings with their versions and where each party stands on each of them. */
-export async function loadStandings({ tx }: Pick<WorkspaceWorld, 'tx'>, records: readonly PairingRecord[]): Promise<PairingStanding[]> {
-  const versions = await listPairingVersions(tx, records.map(({ id }) => id));
-  const decisions = await listPairingDecisions(tx, versions.map(({ row }) => row.id));
-  const parties = presentParties(await listPartiesOfProjects(tx, [...new Set(records.map(({ projectId }) => projectId))]));
-  const partiesOf = (projectId: ProjectId) => parties.filter((party) => party.projectId === projectId).map(({ id }) => id);
+export async function loadStandings(
+  { tx }: Pick<WorkspaceWorld, 'tx'>,
+  records: readonly PairingRecord[],
+): Promise<PairingStanding[]> {
+  const versions = await listPairingVersions(
+    tx,
+    records.map(({ id }) => id),
+  );
+  const decisions = await listPairingDecisions(
+    tx,
+    versions.map(({ row }) => row.id),
+  );
+  const parties = presentParties(
+    await listPartiesOfProjects(tx, [...new Set(records.map(({ projectId }) => projectId))]),
+  );
+  const partiesOf = (projectId: ProjectId) =>
+    parties.filter((party) => party.projectId === projectId).map(({ id }) => id);
   return records.map((record) => ({
     record,
     partyIds: partiesOf(record.projectId),
@@ -29,7 +46,10 @@ export async function loadStandings({ tx }: Pick<WorkspaceWorld, 'tx'>, records:
         const about = decisions.filter(({ subjectId }) => subjectId === version.row.id);
         const agreed = [...new Set(about.map(({ partyId }) => partyId))];
         // What is locked shows who agreed to it then, whoever is in the project today.
-        return { version, standings: standingsOf(version.row.lockedAt ? agreed : partiesOf(record.projectId), about) };
+        return {
+          version,
+          standings: standingsOf(version.row.lockedAt ? agreed : partiesOf(record.projectId), about),
+        };
       }),
   }));
 }

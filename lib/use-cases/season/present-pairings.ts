@@ -9,10 +9,14 @@ import { sumPerParty } from './sum-per-party';
 import { loadStandings, type PairingStanding } from './pairing-standing';
 
 /** Whether the caller may see what a pairing is worth. */
-export const seesWorth = ({ actor }: Pick<WorkspaceWorld, 'actor'>) => reachOf(actor.role, 'pairing.worth') !== 'no';
+export const seesWorth = ({ actor }: Pick<WorkspaceWorld, 'actor'>) =>
+  reachOf(actor.role, 'pairing.worth') !== 'no';
 
 /** Pairings as rows of the season: where they stand, when what is expected, and what they would be worth. */
-export async function presentPairings(world: WorkspaceWorld, records: readonly PairingRecord[]): Promise<PairingRow[]> {
+export async function presentPairings(
+  world: WorkspaceWorld,
+  records: readonly PairingRecord[],
+): Promise<PairingRow[]> {
   const { tx } = world;
   const ids = records.map(({ id }) => id);
   const standings = await loadStandings(world, records);
@@ -34,7 +38,11 @@ export interface SeenOfPairing {
 }
 
 /** One row; null for a pairing of which nothing was proposed yet. */
-export function presentPairing(world: WorkspaceWorld, { record, versions, partyIds }: PairingStanding, seen: SeenOfPairing): PairingRow | null {
+export function presentPairing(
+  world: WorkspaceWorld,
+  { record, versions, partyIds }: PairingStanding,
+  seen: SeenOfPairing,
+): PairingRow | null {
   const current = versions[0];
   if (!current) return null;
   const { figures, plan, number, answerBy } = current.version.row;
@@ -51,11 +59,23 @@ export function presentPairing(world: WorkspaceWorld, { record, versions, partyI
     status: record.status,
     project: { id: record.projectId, name: record.projectName },
     title: figures.title,
-    sire: { id: record.sireId, code: record.sireCode, name: record.sireName, description: figures.sire.description },
-    dam: { id: record.damId, code: record.damCode, name: record.damName, description: figures.dam.description },
+    sire: {
+      id: record.sireId,
+      code: record.sireCode,
+      name: record.sireName,
+      description: figures.sire.description,
+    },
+    dam: {
+      id: record.damId,
+      code: record.damCode,
+      name: record.damName,
+      description: figures.dam.description,
+    },
     number,
     ...countAgreed(current.standings),
-    waitingFor: isOpen ? current.standings.filter(({ state }) => state === 'waiting').map(({ partyId }) => partyId) : [],
+    waitingFor: isOpen
+      ? current.standings.filter(({ state }) => state === 'waiting').map(({ partyId }) => partyId)
+      : [],
     answerBy,
     waitsForMe: isOpen && me !== null && partyIds.includes(me) && mine?.state === 'waiting',
     youngParts: figures.youngParts.parts,

@@ -10,12 +10,23 @@ import { seeFigures } from './see-figures';
 export const previewPairingUseCase = workspaceUseCase(previewPairing, async (world, { body }) => {
   const pair = await choosePair(world, body);
   const days = usualDays(world.today, pair.species.profile, body);
-  const made = await makeFigures(world, { ...pair, startsOn: days.startsOn, eggsExpected: body.eggsExpected ?? null, prices: body.prices ?? null });
+  const made = await makeFigures(world, {
+    ...pair,
+    startsOn: days.startsOn,
+    eggsExpected: body.eggsExpected ?? null,
+    prices: body.prices ?? null,
+  });
   const season = seasonOf(days, pair.species.profile);
   const worth = seesWorth(world);
   return {
     figures: seeFigures(made.figures, worth),
-    plan: { ...days, eggsExpected: made.figures.eggsExpected, note: '', acknowledgedCautions: [], ...(worth ? { prices: made.prices } : {}) },
+    plan: {
+      ...days,
+      eggsExpected: made.figures.eggsExpected,
+      note: '',
+      acknowledgedCautions: [],
+      ...(worth ? { prices: made.prices } : {}),
+    },
     season,
     obstacles: await findObstacles(world, pair, { season, hasTerms: made.figures.termsId !== null }),
     ...(worth ? { medians: made.medians } : {}),

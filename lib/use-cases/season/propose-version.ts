@@ -20,7 +20,11 @@ export interface ProposedPlan {
   answerBy: string | null;
 }
 
-type Proposed = Awaited<ReturnType<typeof choosePair>> & { pairingId: PairingId; season: number; number: number };
+type Proposed = Awaited<ReturnType<typeof choosePair>> & {
+  pairingId: PairingId;
+  season: number;
+  number: number;
+};
 
 /**
  * Keeps a version of a pairing with its figures, counts the proposer's own party as agreeing, and tells all parties.
@@ -34,13 +38,28 @@ export async function proposeVersion(
 ): Promise<{ id: PairingId; versionId: PairingVersionId; number: number; status: PairingStatus }> {
   const { tx, workspace, actor, now, today } = world;
   const { pairingId, season, number } = proposed;
-  const { figures, prices } = await makeFigures(world, { ...proposed, startsOn: plan.startsOn, eggsExpected: plan.eggsExpected, prices: plan.prices });
-  const errors: FieldError[] = await findObstacles(world, proposed, { season, hasTerms: figures.termsId !== null, except: pairingId });
+  const { figures, prices } = await makeFigures(world, {
+    ...proposed,
+    startsOn: plan.startsOn,
+    eggsExpected: plan.eggsExpected,
+    prices: plan.prices,
+  });
+  const errors: FieldError[] = await findObstacles(world, proposed, {
+    season,
+    hasTerms: figures.termsId !== null,
+    except: pairingId,
+  });
   const missing = figures.cautions.filter(({ text }) => !plan.acknowledgedCautions.includes(text));
-  if (missing[0]) errors.push({ field: 'acknowledgedCautions', message: `Confirm that you have read this caution: ${missing[0].text}` });
-  if (plan.answerBy && plan.answerBy < today) errors.push({ field: 'answerBy', message: 'This day is over.' });
+  if (missing[0])
+    errors.push({
+      field: 'acknowledgedCautions',
+      message: `Confirm that you have read this caution: ${missing[0].text}`,
+    });
+  if (plan.answerBy && plan.answerBy < today)
+    errors.push({ field: 'answerBy', message: 'This day is over.' });
   const { termsId, termsNumber } = figures;
-  if (errors.length || termsId === null || termsNumber === null) throw new Refusal('invalid', errors[0]?.message ?? 'This can’t be proposed.', { errors });
+  if (errors.length || termsId === null || termsNumber === null)
+    throw new Refusal('invalid', errors[0]?.message ?? 'This can’t be proposed.', { errors });
 
   await keep();
   const versionId = crypto.randomUUID() as PairingVersionId;
@@ -51,7 +70,14 @@ export async function proposeVersion(
     pairingId,
     number,
     termsId,
-    plan: { startsOn: kept.startsOn, endsOn: kept.endsOn, eggsExpected: kept.eggsExpected, note: kept.note, prices, acknowledgedCautions: kept.acknowledgedCautions },
+    plan: {
+      startsOn: kept.startsOn,
+      endsOn: kept.endsOn,
+      eggsExpected: kept.eggsExpected,
+      note: kept.note,
+      prices,
+      acknowledgedCautions: kept.acknowledgedCautions,
+    },
     figures: { ...figures, termsId, termsNumber },
     proposedBy: actor.memberId,
     proposedAt: now,
@@ -59,9 +85,21 @@ export async function proposeVersion(
   });
   const standing = await loadCurrent(world, pairingId);
   if (actor.partyId && standing.partyIds.includes(actor.partyId)) {
-    await insertPairingDecision(tx, { workspaceId: workspace.id, pairingVersionId: versionId, partyId: actor.partyId, decision: 'agreed', comment: '', decidedBy: actor.memberId, decidedAt: now });
+    await insertPairingDecision(tx, {
+      workspaceId: workspace.id,
+      pairingVersionId: versionId,
+      partyId: actor.partyId,
+      decision: 'agreed',
+      comment: '',
+      decidedBy: actor.memberId,
+      decidedAt: now,
+    });
   }
-  await recordAudit(world, { action: 'pairing.propose', subject: { kind: 'pairing', id: pairingId }, detail: { number, title: figures.title, termsId, season } });
+  await recordAudit(world, {
+    action: 'pairing.propose',
+    subject: { kind: 'pairing', id: pairingId },
+    detail: { number, title: figures.title, termsId, season },
+  });
   const after = await loadCurrent(world, pairingId);
   const locked = await sealWhenUnanimous(world, after);
   await tellProposal(world, after);

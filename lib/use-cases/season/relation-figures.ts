@@ -16,13 +16,25 @@ export interface RelationFigures {
 type Row = { id: AnimalId; code: string; sireId: AnimalId | null; damId: AnimalId | null };
 const MOST_NAMED = 6;
 
-const times = (generations: number) => ['the animal itself', 'one generation', 'two generations', 'three generations', 'four generations', 'five generations'][generations] ?? `${generations} generations`;
+const times = (generations: number) =>
+  [
+    'the animal itself',
+    'one generation',
+    'two generations',
+    'three generations',
+    'four generations',
+    'five generations',
+  ][generations] ?? `${generations} generations`;
 
 /**
  * Kinship of two animals over the whole pedigree. An ancestor that stands outside what the parties of the project see is
  * counted, but not named.
  */
-export function relationFigures(rows: readonly Row[], pair: { sireId: AnimalId; damId: AnimalId }, isNamed: (id: string) => boolean): RelationFigures {
+export function relationFigures(
+  rows: readonly Row[],
+  pair: { sireId: AnimalId; damId: AnimalId },
+  isNamed: (id: string) => boolean,
+): RelationFigures {
   const pedigree = orderPedigree(rows.map(({ id, sireId, damId }) => ({ id, sire: sireId, dam: damId })));
   const codes = new Map<string, string>(rows.map(({ id, code }) => [id, code]));
   const { paths } = ancestryPaths(pedigree, pair.sireId, pair.damId);

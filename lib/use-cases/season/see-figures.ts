@@ -10,7 +10,10 @@ export function seeFigures(figures: Figures, seesWorth: boolean): SeenFigures {
   return { ...rest, outcomes: outcomes.map(({ price: _price, ...outcome }) => outcome) };
 }
 
-export function seePlan(plan: PairingPlan, seesWorth: boolean): Omit<PairingPlan, 'prices'> & Partial<Pick<PairingPlan, 'prices'>> {
+export function seePlan(
+  plan: PairingPlan,
+  seesWorth: boolean,
+): Omit<PairingPlan, 'prices'> & Partial<Pick<PairingPlan, 'prices'>> {
   if (seesWorth) return plan;
   const { prices: _prices, ...rest } = plan;
   return rest;

@@ -40,14 +40,20 @@ export const showPairingUseCase = workspaceUseCase(showPairing, async (world, { 
   };
 });
 
-async function presentVersions(world: WorkspaceWorld, { versions }: PairingStanding): Promise<PairingVersion[]> {
+async function presentVersions(
+  world: WorkspaceWorld,
+  { versions }: PairingStanding,
+): Promise<PairingVersion[]> {
   const worth = seesWorth(world);
   const seesComments = reachOf(world.actor.role, 'comment.write') !== 'no';
   const shown: PairingVersion[] = [];
   for (const [index, { version, standings }] of versions.entries()) {
     const { row, proposedBy, proposedByParty } = version;
     const before = versions[index + 1]?.version.row ?? null;
-    const terms = { now: await findTermsById(world.tx, row.termsId), before: before ? await findTermsById(world.tx, before.termsId) : null };
+    const terms = {
+      now: await findTermsById(world.tx, row.termsId),
+      before: before ? await findTermsById(world.tx, before.termsId) : null,
+    };
     shown.push({
       id: row.id,
       number: row.number,
@@ -62,7 +68,13 @@ async function presentVersions(world: WorkspaceWorld, { versions }: PairingStand
       plan: seePlan(row.plan, worth),
       figures: seeFigures(row.figures, worth),
       standings: presentStandings(standings, seesComments),
-      changes: before ? comparePairingVersions({ ...before, terms: terms.before?.content }, { ...row, terms: terms.now?.content }, worth) : [],
+      changes: before
+        ? comparePairingVersions(
+            { ...before, terms: terms.before?.content },
+            { ...row, terms: terms.now?.content },
+            worth,
+          )
+        : [],
     });
   }
   return shown;

@@ -14,7 +14,9 @@ export const showSeasonUseCase = workspaceUseCase(showSeason, async (world, { qu
   const known = await listSeasons(tx, sees);
   const season = query.season ?? currentSeason(known, today);
   const records = await listPairingRecords(tx, sees, { season, project: query.project });
-  const rows = (await presentPairings(world, records)).filter((row) => isInState(row, query.state) && isPartlyOf(row, query.party));
+  const rows = (await presentPairings(world, records)).filter(
+    (row) => isInState(row, query.state) && isPartlyOf(row, query.party),
+  );
   const standing = rows.filter(({ status }) => status !== 'withdrawn');
   return {
     season,
@@ -33,25 +35,49 @@ function currentSeason(known: readonly number[], today: string): number {
   const [year = 0, month = 1] = today.split('-').map(Number);
   // From September on, people plan for the young of the next year.
   const planned = month >= 9 ? year + 1 : year;
-  return known.find((season) => season === planned) ?? known.find((season) => season <= planned) ?? known[0] ?? planned;
+  return (
+    known.find((season) => season === planned) ??
+    known.find((season) => season <= planned) ??
+    known[0] ??
+    planned
+  );
 }
 
-async function loadExpected({ tx }: WorkspaceWorld, rows: readonly PairingRow[], records: Awaited<ReturnType<typeof listPairingRecords>>): Promise<ExpectedClutch[]> {
-  const laid = await listClutchesOfPairings(tx, rows.map(({ id }) => id));
+async function loadExpected(
+  { tx }: WorkspaceWorld,
+  rows: readonly PairingRow[],
+  records: Awaited<ReturnType<typeof listPairingRecords>>,
+): Promise<ExpectedClutch[]> {
+  const laid = await listClutchesOfPairings(
+    tx,
+    rows.map(({ id }) => id),
+  );
   return rows.flatMap((row): ExpectedClutch[] => {
     const profile = records.find(({ id }) => id === row.id)?.profile;
     const [top = 0, bottom = 1] = (profile?.hatchRate.fraction ?? '0/1').split('/').map(Number);
     const hatchRate = top / bottom;
     const own = laid.filter(({ pairingId }) => pairingId === row.id);
-    if (own.length) return own.map(({ eggs, hatchedOn, young }) => ({ eggs, eggRange: null, hatchRate, hatched: hatchedOn ? young : null }));
-    return [{ eggs: row.eggsExpected, eggRange: profile ? profile.clutchSize : null, hatchRate, hatched: null }];
+    if (own.length)
+      return own.map(({ eggs, hatchedOn, young }) => ({
+        eggs,
+        eggRange: null,
+        hatchRate,
+        hatched: hatchedOn ? young : null,
+      }));
+    return [
+      { eggs: row.eggsExpected, eggRange: profile ? profile.clutchSize : null, hatchRate, hatched: null },
+    ];
   });
 }
 
-function addProceeds(rows: readonly PairingRow[]): { expected: number; shares: { partyId: PartyId; amount: number }[] } {
+function addProceeds(rows: readonly PairingRow[]): {
+  expected: number;
+  shares: { partyId: PartyId; amount: number }[];
+} {
   const sums = new Map<PartyId, number>();
   for (const { proceeds } of rows) {
-    for (const { partyId, amount } of proceeds?.shares ?? []) sums.set(partyId, (sums.get(partyId) ?? 0) + amount);
+    for (const { partyId, amount } of proceeds?.shares ?? [])
+      sums.set(partyId, (sums.get(partyId) ?? 0) + amount);
   }
   return {
     expected: rows.reduce((sum, { proceeds }) => sum + (proceeds?.expected ?? 0), 0),
@@ -61,7 +87,12 @@ function addProceeds(rows: readonly PairingRow[]): { expected: number; shares: {
 
 /** From the month in which the first thing happens to the end of the month of the last; at least twelve months. */
 function spanOf(season: number, rows: readonly PairingRow[]): { from: string; to: string } {
-  const days = rows.flatMap(({ phases, moments }) => [...phases.flatMap(({ from, to }) => [from, to]), ...moments.map(({ day }) => day)]).sort();
+  const days = rows
+    .flatMap(({ phases, moments }) => [
+      ...phases.flatMap(({ from, to }) => [from, to]),
+      ...moments.map(({ day }) => day),
+    ])
+    .sort();
   const first = days[0] ?? `${season - 1}-11-01`;
   const from = `${first.slice(0, 7)}-01`;
   const [year = season, month = 1] = from.split('-').map(Number);

@@ -10,12 +10,13 @@ import type { WorkspaceWorld } from '../world';
 import type { PairingStanding } from './pairing-standing';
 
 /** The address of a pairing's page, opened at the decision. */
-export const decisionPath = (pairingId: string) => `season/pairings/${pairingId}?decide=1`;
+const decisionPath = (pairingId: string) => `season/pairings/${pairingId}?decide=1`;
 
-const linkTo = ({ workspace }: WorkspaceWorld, path: string) => `${configuration().appUrl}/${workspace.slug}/${path}`;
+const linkTo = ({ workspace }: WorkspaceWorld, path: string) =>
+  `${configuration().appUrl}/${workspace.slug}/${path}`;
 
 /** What a party would get, in one line of the mail. */
-export function shareLine(figures: PairingFigures, partyId: string | null): string {
+function shareLine(figures: PairingFigures, partyId: string | null): string {
   const { proceeds } = figures;
   const share = proceeds.shares.find((one) => one.partyId === partyId);
   const whole = formatMoney(proceeds.expected, proceeds.currency);
@@ -24,7 +25,10 @@ export function shareLine(figures: PairingFigures, partyId: string | null): stri
 }
 
 /** Tells every party of a proposal: in the product, and by mail with a link straight to the decision. */
-export async function tellProposal(world: WorkspaceWorld, { record, versions, partyIds }: PairingStanding): Promise<void> {
+export async function tellProposal(
+  world: WorkspaceWorld,
+  { record, versions, partyIds }: PairingStanding,
+): Promise<void> {
   const current = versions[0];
   if (!current) return;
   const { figures, number, answerBy } = current.version.row;
@@ -32,7 +36,12 @@ export async function tellProposal(world: WorkspaceWorld, { record, versions, pa
   const recipients = await notifyParties(
     world,
     partyIds,
-    { kind: 'pairing-proposed', title: `${world.actor.name} proposes ${figures.title}${number > 1 ? `, version ${number}` : ''}`, body: record.projectName, href },
+    {
+      kind: 'pairing-proposed',
+      title: `${world.actor.name} proposes ${figures.title}${number > 1 ? `, version ${number}` : ''}`,
+      body: record.projectName,
+      href,
+    },
     world.actor.memberId,
   );
   for (const recipient of recipients) {
@@ -40,7 +49,15 @@ export async function tellProposal(world: WorkspaceWorld, { record, versions, pa
       workspaceId: world.workspace.id,
       template: 'pairing-proposed',
       to: recipient.email,
-      data: { name: recipient.name, proposer: world.actor.name, project: record.projectName, title: figures.title, answerBy, shareLine: shareLine(figures, recipient.partyId), link: linkTo(world, href) },
+      data: {
+        name: recipient.name,
+        proposer: world.actor.name,
+        project: record.projectName,
+        title: figures.title,
+        answerBy,
+        shareLine: shareLine(figures, recipient.partyId),
+        link: linkTo(world, href),
+      },
     });
   }
 }
@@ -62,7 +79,12 @@ export async function tellDecision(
   const recipients = await notifyParties(
     world,
     partyIds,
-    { kind: 'pairing-decided', title: `${world.actor.name} ${verb} ${figures.title}`, body: comment || state, href: `season/pairings/${record.id}` },
+    {
+      kind: 'pairing-decided',
+      title: `${world.actor.name} ${verb} ${figures.title}`,
+      body: comment || state,
+      href: `season/pairings/${record.id}`,
+    },
     world.actor.memberId,
   );
   for (const recipient of recipients) {
@@ -70,7 +92,16 @@ export async function tellDecision(
       workspaceId: world.workspace.id,
       template: 'pairing-decided',
       to: recipient.email,
-      data: { name: recipient.name, decider: world.actor.name, decision, comment, project: record.projectName, title: figures.title, state, link: linkTo(world, `season/pairings/${record.id}`) },
+      data: {
+        name: recipient.name,
+        decider: world.actor.name,
+        decision,
+        comment,
+        project: record.projectName,
+        title: figures.title,
+        state,
+        link: linkTo(world, `season/pairings/${record.id}`),
+      },
     });
   }
 }

@@ -23,10 +23,17 @@ const parameters: Record<string, (workspace: TestWorkspace) => string> = {
   project: ({ projectId }) => projectId,
 };
 
-async function call(route: FoundRoute, slug: string, things: TestWorkspace, caller: Caller['person']): Promise<number> {
+async function call(
+  route: FoundRoute,
+  slug: string,
+  things: TestWorkspace,
+  caller: Caller['person'],
+): Promise<number> {
   signedIn.person = caller;
   const names = [...route.contract.path.matchAll(/\{(\w+)\}/g)].map(([, name]) => name ?? '');
-  const params = Object.fromEntries(names.map((name) => [name, name === 'workspace' ? slug : (parameters[name]?.(things) ?? nowhere)]));
+  const params = Object.fromEntries(
+    names.map((name) => [name, name === 'workspace' ? slug : (parameters[name]?.(things) ?? nowhere)]),
+  );
   const { method, consumes } = route.contract;
   const hasBody = method !== 'GET' && method !== 'DELETE';
   const body = consumes === 'multipart/form-data' ? new FormData() : '{}';
@@ -41,7 +48,9 @@ async function call(route: FoundRoute, slug: string, things: TestWorkspace, call
 describe('the routes', () => {
   test('are bound to contracts that name their method and path', () => {
     expect(routes.length).toBeGreaterThan(30);
-    expect(routes.map(({ name }) => name)).toEqual(routes.map(({ contract }) => `${contract.method} ${contract.path}`));
+    expect(routes.map(({ name }) => name)).toEqual(
+      routes.map(({ contract }) => `${contract.method} ${contract.path}`),
+    );
     expect(new Set(routes.map(({ contract }) => contract.id)).size).toBe(routes.length);
   });
 });
@@ -56,11 +65,14 @@ describe.each(inWorkspace.map((route) => [route.name, route] as const))('%s', (_
     expect(await call(route, here.slug, here, there.owner.person)).toBe(404);
   });
 
-  test.each(['owner', 'partner', 'keeper', 'accountant'] as const)('answers the %s as the table says', async (role) => {
-    const status = await call(route, here.slug, here, here[role].person);
-    if (reachOf(role, action) === 'no') expect(status).toBe(403);
-    else expect([200, 400, 404, 409, 415, 422]).toContain(status);
-  });
+  test.each(['owner', 'partner', 'keeper', 'accountant'] as const)(
+    'answers the %s as the table says',
+    async (role) => {
+      const status = await call(route, here.slug, here, here[role].person);
+      if (reachOf(role, action) === 'no') expect(status).toBe(403);
+      else expect([200, 400, 404, 409, 415, 422]).toContain(status);
+    },
+  );
 
   test('shows nothing of another workspace to a member of this one', async () => {
     const hasThing = /\{(?!workspace)\w+\}/.test(route.contract.path);

@@ -4,7 +4,10 @@ import type { Contract } from '@/lib/contracts/contract';
 
 const root = path.resolve(import.meta.dirname, '../../..');
 
-export type RouteHandler = ((request: Request, context: { params: Promise<Record<string, string>> }) => Promise<Response>) & {
+type RouteHandler = ((
+  request: Request,
+  context: { params: Promise<Record<string, string>> },
+) => Promise<Response>) & {
   contract: Contract;
 };
 
@@ -27,7 +30,8 @@ export async function findRoutes(): Promise<FoundRoute[]> {
     const bound = (await import(path.join(root, file))) as Record<string, RouteHandler>;
     for (const method of ['GET', 'POST', 'PUT', 'PATCH', 'DELETE']) {
       const handler = bound[method];
-      if (handler) found.push({ name: `${method} ${pathOf(file)}`, file, handler, contract: handler.contract });
+      if (handler)
+        found.push({ name: `${method} ${pathOf(file)}`, file, handler, contract: handler.contract });
     }
   }
   return found;

@@ -20,7 +20,9 @@ describe('the catalogue of the database', () => {
       where n.nspname = 'public' and c.relkind = 'r'`;
     const tenant = tables.filter(({ name }) => !peoplesTables.includes(name));
     expect(tenant.length).toBeGreaterThan(40);
-    expect(tenant.filter(({ enabled, forced, policies }) => !enabled || !forced || policies === 0)).toEqual([]);
+    expect(tenant.filter(({ enabled, forced, policies }) => !enabled || !forced || policies === 0)).toEqual(
+      [],
+    );
   });
 
   test('every key from one table of a workspace to another carries the workspace', async () => {
@@ -48,10 +50,14 @@ describe('the catalogue of the database', () => {
 describe('two workspaces', () => {
   test('a transaction sees the rows of the announced workspace only, and nothing without one', async () => {
     const [here, there] = [await makeWorkspace(), await makeWorkspace()];
-    const seenHere = await withScope({ workspaceId: here.id }, (tx) => tx.select({ workspaceId: animals.workspaceId }).from(animals));
+    const seenHere = await withScope({ workspaceId: here.id }, (tx) =>
+      tx.select({ workspaceId: animals.workspaceId }).from(animals),
+    );
     expect(seenHere.length).toBe(3);
     expect(new Set(seenHere.map((row) => row.workspaceId))).toEqual(new Set([here.id]));
-    const seenByNobody = await withScope({ userId: there.owner.person.userId }, (tx) => tx.select().from(animals));
+    const seenByNobody = await withScope({ userId: there.owner.person.userId }, (tx) =>
+      tx.select().from(animals),
+    );
     expect(seenByNobody).toEqual([]);
   });
 
@@ -64,7 +70,14 @@ describe('two workspaces', () => {
     ).rejects.toMatchObject({ cause: { code: '42501' } });
     await expect(
       withScope({ workspaceId: here.id }, (tx) =>
-        tx.insert(projectAnimals).values({ workspaceId: here.id, projectId: here.projectId, animalId: there.sireId, addedOn: '2024-01-01' }),
+        tx
+          .insert(projectAnimals)
+          .values({
+            workspaceId: here.id,
+            projectId: here.projectId,
+            animalId: there.sireId,
+            addedOn: '2024-01-01',
+          }),
       ),
     ).rejects.toMatchObject({ cause: { code: '23503' } });
   });

@@ -17,7 +17,13 @@ export const draftFor = (workspace: TestWorkspace): TermsDraft => ({
 /** Has the owner propose terms for the first project and the partner agree to them. */
 export async function agreeOnTerms(workspace: TestWorkspace): Promise<string> {
   const params = { project: workspace.projectId };
-  const { id } = await performAs(workspace, workspace.owner, proposeTermsUseCase, { params, body: { content: draftFor(workspace), inForceFrom: '2024-01-01' } });
-  await performAs(workspace, workspace.partner, decideTermsUseCase, { params: { ...params, terms: id }, body: { decision: 'agreed' } });
+  const { id } = await performAs(workspace, workspace.owner, proposeTermsUseCase, {
+    params,
+    body: { content: draftFor(workspace), inForceFrom: '2024-01-01' },
+  });
+  await performAs(workspace, workspace.partner, decideTermsUseCase, {
+    params: { ...params, terms: id },
+    body: { decision: 'agreed' },
+  });
   return id;
 }

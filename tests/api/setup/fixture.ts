@@ -99,7 +99,7 @@ async function makeMember(
 }
 
 /** Inserts an animal owned in the given parts since its hatching. */
-export async function makeAnimal(
+async function makeAnimal(
   tx: Transaction,
   workspaceId: WorkspaceId,
   animal: {
@@ -132,17 +132,15 @@ async function makeProject(
 ): Promise<ProjectId> {
   const id = randomUUID() as ProjectId;
   await tx.insert(projects).values({ workspaceId, id, startedOn: '2024-01-01', ...project });
-  await tx
-    .insert(projectParties)
-    .values(
-      partyIds.map((partyId, index) => ({
-        workspaceId,
-        projectId: id,
-        partyId,
-        rank: index + 1,
-        joinedOn: '2024-01-01',
-      })),
-    );
+  await tx.insert(projectParties).values(
+    partyIds.map((partyId, index) => ({
+      workspaceId,
+      projectId: id,
+      partyId,
+      rank: index + 1,
+      joinedOn: '2024-01-01',
+    })),
+  );
   await tx
     .insert(projectAnimals)
     .values(animalIds.map((animalId) => ({ workspaceId, projectId: id, animalId, addedOn: '2024-01-01' })));
@@ -186,15 +184,13 @@ export async function makeWorkspace(): Promise<TestWorkspace> {
       codePrefix: 'TP',
       profile: testProfile,
     });
-    await tx
-      .insert(loci)
-      .values({
-        workspaceId: id,
-        id: locusId,
-        speciesId,
-        name: 'Albino',
-        definition: defineRecessive(locusId, 'Albino', 'a'),
-      });
+    await tx.insert(loci).values({
+      workspaceId: id,
+      id: locusId,
+      speciesId,
+      name: 'Albino',
+      definition: defineRecessive(locusId, 'Albino', 'a'),
+    });
     const sireId = await makeAnimal(tx, id, { code: 'TP-001', speciesId, sex: 'male' }, [
       { partyId: ownerParty, parts: 1 },
       { partyId: partnerParty, parts: 1 },

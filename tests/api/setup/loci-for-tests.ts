@@ -4,5 +4,10 @@ import type { LocusDefinition } from '@/lib/genetics/locus';
 
 /** A made-up recessive locus of two alleles, "+" and `allele`; two copies look as the locus is named. */
 export function defineRecessive(id: LocusId, name: string, allele: string): LocusDefinition {
-  return define({ id, name, allele, source: { citation: 'made up for the tests', certainty: 'common practice' } });
+  return define({
+    id,
+    name,
+    allele,
+    source: { citation: 'made up for the tests', certainty: 'common practice' },
+  });
 }

@@ -1,7 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { addDays, daysBetween, wholeMonths } from '@/lib/season/days';
-import { forecastSeason, sumOfIntervals, type SeasonFacts, type SeasonIntervals } from '@/lib/season/forecast';
+import {
+  forecastSeason,
+  sumOfIntervals,
+  type SeasonFacts,
+  type SeasonIntervals,
+} from '@/lib/season/forecast';
 
 // Made-up intervals; the checks are of the arithmetic, not of a species.
 const intervals: SeasonIntervals = {
@@ -10,7 +15,12 @@ const intervals: SeasonIntervals = {
   preLayShedToLaying: { from: 25, usual: 30, to: 50 },
   incubation: { from: 53, usual: 58, to: 65 },
 };
-const planned: SeasonFacts = { plan: { startsOn: '2026-11-24', endsOn: '2027-02-10' }, events: [], clutch: null, bearing: 'eggs' };
+const planned: SeasonFacts = {
+  plan: { startsOn: '2026-11-24', endsOn: '2027-02-10' },
+  events: [],
+  clutch: null,
+  bearing: 'eggs',
+};
 const seen = (...events: SeasonFacts['events']): SeasonFacts => ({ ...planned, events });
 
 describe('days', () => {
@@ -27,10 +37,17 @@ describe('days', () => {
 
 describe('sum of intervals', () => {
   it('adds usual lengths and takes deviations in quadrature (3-4-5 triangle)', () => {
-    expect(sumOfIntervals([{ from: 7, usual: 10, to: 16 }, { from: 16, usual: 20, to: 28 }])).toEqual({ from: 25, usual: 30, to: 40 });
+    expect(
+      sumOfIntervals([
+        { from: 7, usual: 10, to: 16 },
+        { from: 16, usual: 20, to: 28 },
+      ]),
+    ).toEqual({ from: 25, usual: 30, to: 40 });
   });
   it('is never wider than adding all extremes, and keeps one interval as it is', () => {
-    const interval = fc.tuple(fc.nat(60), fc.nat(60), fc.nat(60)).map(([a, b, c]) => ({ from: a, usual: a + b, to: a + b + c }));
+    const interval = fc
+      .tuple(fc.nat(60), fc.nat(60), fc.nat(60))
+      .map(([a, b, c]) => ({ from: a, usual: a + b, to: a + b + c }));
     fc.assert(
       fc.property(fc.array(interval, { minLength: 1, maxLength: 5 }), (many) => {
         const sum = sumOfIntervals(many);
@@ -56,9 +73,16 @@ describe('forecast of a season', () => {
       return daysBetween(laying!.from, laying!.to);
     };
     const ovulated = seen({ kind: 'ovulation', seenOn: '2027-01-20' });
-    const shed = seen({ kind: 'ovulation', seenOn: '2027-01-20' }, { kind: 'pre_lay_shed', seenOn: '2027-02-09' });
+    const shed = seen(
+      { kind: 'ovulation', seenOn: '2027-01-20' },
+      { kind: 'pre_lay_shed', seenOn: '2027-02-09' },
+    );
     expect(width(ovulated)).toBeLessThan(width(planned));
-    expect(forecastSeason(shed, intervals, '2027-02-10').laying).toEqual({ from: '2027-03-06', usual: '2027-03-11', to: '2027-03-31' });
+    expect(forecastSeason(shed, intervals, '2027-02-10').laying).toEqual({
+      from: '2027-03-06',
+      usual: '2027-03-11',
+      to: '2027-03-31',
+    });
     expect(width(shed)).toBe(25);
   });
   it('counts hatching from the day of laying and stops once hatched', () => {
@@ -66,8 +90,14 @@ describe('forecast of a season', () => {
     const forecast = forecastSeason(laid, intervals, '2027-03-20');
     expect(forecast.laying).toBeNull();
     expect(forecast.hatching).toEqual({ from: '2027-05-02', usual: '2027-05-07', to: '2027-05-14' });
-    expect(forecast.phases.find(({ kind, certainty }) => kind === 'incubation' && certainty === 'observed')).toMatchObject({ from: '2027-03-10', to: '2027-03-20' });
-    const hatched = forecastSeason({ ...laid, clutch: { laidOn: '2027-03-10', hatchedOn: '2027-05-08' } }, intervals, '2027-06-01');
+    expect(
+      forecast.phases.find(({ kind, certainty }) => kind === 'incubation' && certainty === 'observed'),
+    ).toMatchObject({ from: '2027-03-10', to: '2027-03-20' });
+    const hatched = forecastSeason(
+      { ...laid, clutch: { laidOn: '2027-03-10', hatchedOn: '2027-05-08' } },
+      intervals,
+      '2027-06-01',
+    );
     expect(hatched.hatching).toBeNull();
     expect(hatched.phases.every(({ certainty }) => certainty === 'observed')).toBe(true);
   });
@@ -85,11 +115,17 @@ describe('forecast of a season', () => {
   it('keeps phases in order of time and each from before to', () => {
     const kinds = ['introduction', 'lock', 'ovulation', 'pre_lay_shed'] as const;
     fc.assert(
-      fc.property(fc.array(fc.nat(160), { maxLength: 4 }), fc.integer({ min: -30, max: 400 }), (offsets, todayOffset) => {
-        const events = [...offsets].sort((a, b) => a - b).map((offset, index) => ({ kind: kinds[index]!, seenOn: addDays('2026-11-24', offset) }));
-        const { phases } = forecastSeason(seen(...events), intervals, addDays('2026-11-24', todayOffset));
-        for (const phase of phases) expect(phase.from <= phase.to, JSON.stringify(phase)).toBe(true);
-      }),
+      fc.property(
+        fc.array(fc.nat(160), { maxLength: 4 }),
+        fc.integer({ min: -30, max: 400 }),
+        (offsets, todayOffset) => {
+          const events = [...offsets]
+            .sort((a, b) => a - b)
+            .map((offset, index) => ({ kind: kinds[index]!, seenOn: addDays('2026-11-24', offset) }));
+          const { phases } = forecastSeason(seen(...events), intervals, addDays('2026-11-24', todayOffset));
+          for (const phase of phases) expect(phase.from <= phase.to, JSON.stringify(phase)).toBe(true);
+        },
+      ),
     );
   });
 });

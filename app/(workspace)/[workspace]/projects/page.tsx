@@ -8,7 +8,10 @@ export const metadata: Metadata = { title: 'Joint projects' };
 export default async function ProjectsPage(props: { params: Promise<{ workspace: string }> }) {
   const { workspace } = await props.params;
   return (
-    <Prefetch from={`/${workspace}/projects`} queries={[prefetched(listProjectsUseCase, { params: { workspace } })]}>
+    <Prefetch
+      from={`/${workspace}/projects`}
+      queries={[prefetched(listProjectsUseCase, { params: { workspace } })]}
+    >
       <ProjectsScreen />
     </Prefetch>
   );

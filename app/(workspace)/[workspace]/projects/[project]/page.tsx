@@ -7,12 +7,17 @@ import { showProjectUseCase } from '@/lib/use-cases/projects/show-project';
 
 export const metadata: Metadata = { title: 'Joint project' };
 
-export default async function ProjectPage(props: { params: Promise<{ workspace: string; project: string }> }) {
+export default async function ProjectPage(props: {
+  params: Promise<{ workspace: string; project: string }>;
+}) {
   const { workspace, project } = await props.params;
   const id = projectId.safeParse(project).data;
   if (!id) notFound();
   return (
-    <Prefetch from={`/${workspace}/projects/${id}`} queries={[prefetched(showProjectUseCase, { params: { workspace, project: id } })]}>
+    <Prefetch
+      from={`/${workspace}/projects/${id}`}
+      queries={[prefetched(showProjectUseCase, { params: { workspace, project: id } })]}
+    >
       <ProjectScreen id={id} />
     </Prefetch>
   );

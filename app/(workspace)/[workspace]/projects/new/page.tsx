@@ -8,7 +8,10 @@ export const metadata: Metadata = { title: 'Start a joint project' };
 export default async function NewProjectPage(props: { params: Promise<{ workspace: string }> }) {
   const { workspace } = await props.params;
   return (
-    <Prefetch from={`/${workspace}/projects/new`} queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}>
+    <Prefetch
+      from={`/${workspace}/projects/new`}
+      queries={[prefetched(listSpeciesUseCase, { params: { workspace } })]}
+    >
       <NewProjectScreen />
     </Prefetch>
   );

@@ -8,11 +8,16 @@ import { showPairingUseCase } from '@/lib/use-cases/season/show-pairing';
 
 export const metadata: Metadata = { title: 'Propose a pairing' };
 
-export default async function ProposePage(props: { params: Promise<{ workspace: string }>; searchParams: Promise<{ again?: string; project?: string }> }) {
+export default async function ProposePage(props: {
+  params: Promise<{ workspace: string }>;
+  searchParams: Promise<{ again?: string; project?: string }>;
+}) {
   const { workspace } = await props.params;
   const search = await props.searchParams;
   const again = search.again === undefined ? null : (pairingId.safeParse(search.again).data ?? notFound());
-  const queries = again ? [prefetched(showPairingUseCase, { params: { workspace, pairing: again } })] : [prefetched(listProjectsUseCase, { params: { workspace } })];
+  const queries = again
+    ? [prefetched(showPairingUseCase, { params: { workspace, pairing: again } })]
+    : [prefetched(listProjectsUseCase, { params: { workspace } })];
   return (
     <Prefetch from={`/${workspace}/season/propose`} queries={queries}>
       <ProposeScreen again={again} project={projectId.safeParse(search.project).data ?? null} />

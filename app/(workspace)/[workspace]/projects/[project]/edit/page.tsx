@@ -7,12 +7,17 @@ import { showProjectUseCase } from '@/lib/use-cases/projects/show-project';
 
 export const metadata: Metadata = { title: 'Edit project' };
 
-export default async function EditProjectPage(props: { params: Promise<{ workspace: string; project: string }> }) {
+export default async function EditProjectPage(props: {
+  params: Promise<{ workspace: string; project: string }>;
+}) {
   const { workspace, project } = await props.params;
   const id = projectId.safeParse(project).data;
   if (!id) notFound();
   return (
-    <Prefetch from={`/${workspace}/projects/${id}/edit`} queries={[prefetched(showProjectUseCase, { params: { workspace, project: id } })]}>
+    <Prefetch
+      from={`/${workspace}/projects/${id}/edit`}
+      queries={[prefetched(showProjectUseCase, { params: { workspace, project: id } })]}
+    >
       <EditProjectScreen id={id} />
     </Prefetch>
   );

@@ -7,7 +7,10 @@ import { showPairingUseCase } from '@/lib/use-cases/season/show-pairing';
 
 export const metadata: Metadata = { title: 'Pairing' };
 
-export default async function PairingPage(props: { params: Promise<{ workspace: string; pairing: string }>; searchParams: Promise<{ decide?: string }> }) {
+export default async function PairingPage(props: {
+  params: Promise<{ workspace: string; pairing: string }>;
+  searchParams: Promise<{ decide?: string }>;
+}) {
   const { workspace, pairing } = await props.params;
   const { decide } = await props.searchParams;
   const id = pairingId.safeParse(pairing).data;

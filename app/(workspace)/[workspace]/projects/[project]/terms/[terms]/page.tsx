@@ -7,14 +7,22 @@ import { showTermsUseCase } from '@/lib/use-cases/projects/show-terms';
 
 export const metadata: Metadata = { title: 'Terms' };
 
-export default async function TermsPage(props: { params: Promise<{ workspace: string; project: string; terms: string }>; searchParams: Promise<{ decide?: string }> }) {
+export default async function TermsPage(props: {
+  params: Promise<{ workspace: string; project: string; terms: string }>;
+  searchParams: Promise<{ decide?: string }>;
+}) {
   const { workspace, project, terms } = await props.params;
   const { decide } = await props.searchParams;
   const ids = { project: projectId.safeParse(project).data, terms: termsId.safeParse(terms).data };
   if (!ids.project || !ids.terms) notFound();
   const from = `/${workspace}/projects/${ids.project}/terms/${ids.terms}${decide === '1' ? '?decide=1' : ''}`;
   return (
-    <Prefetch from={from} queries={[prefetched(showTermsUseCase, { params: { workspace, project: ids.project, terms: ids.terms } })]}>
+    <Prefetch
+      from={from}
+      queries={[
+        prefetched(showTermsUseCase, { params: { workspace, project: ids.project, terms: ids.terms } }),
+      ]}
+    >
       <TermsScreen project={ids.project} terms={ids.terms} />
     </Prefetch>
   );
